@@ -1,0 +1,4 @@
+/** The maths of the product: pure functions on whole nanometres. docs/maths.md explains each result. */
+export * from './analysis-error';
+export * from './types';
+export * from './units';
