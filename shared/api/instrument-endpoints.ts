@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { idSchema, nameSchema, notNegativeNmSchema, positiveNmSchema, unitStyleSchema } from '../quantities';
+import { idSchema, nameSchema, positiveNmSchema, unitStyleSchema } from '../quantities';
 import { endpoint } from './endpoint';
 
 const laserFields = {
