@@ -21,7 +21,8 @@ export function notNegative(name: string, value: number): number {
 /** Finite and above zero, else 'not-positive'. */
 export function positive(name: string, value: number): number {
   const checked = finite(name, value);
-  if (checked <= 0) throw new AnalysisError('not-positive', `${name} must be greater than zero, got ${checked}.`, { name, value });
+  if (checked <= 0)
+    throw new AnalysisError('not-positive', `${name} must be greater than zero, got ${checked}.`, { name, value });
   return checked;
 }
 
@@ -31,4 +32,26 @@ export function inRange(name: string, value: number): number {
     throw new AnalysisError('out-of-range', `${name} is beyond what can be computed from this input.`, { name });
   }
   return value === 0 ? 0 : value;
+}
+
+/** A length or elevation that whole nanometres can hold exactly (up to 2^53, about 9,000 km), else 'out-of-range'. */
+export function nanometres(name: string, value: number): number {
+  const checked = finite(name, value);
+  if (Math.abs(checked) > Number.MAX_SAFE_INTEGER) {
+    throw new AnalysisError('out-of-range', `${name} is longer than nanometres can hold exactly, got ${checked}.`, {
+      name,
+      value,
+    });
+  }
+  return checked;
+}
+
+/** `nanometres`, and at least zero, else 'negative'. */
+export function lengthFromZero(name: string, value: number): number {
+  return nanometres(name, notNegative(name, value));
+}
+
+/** `nanometres`, and above zero, else 'not-positive'. */
+export function positiveLength(name: string, value: number): number {
+  return nanometres(name, positive(name, value));
 }
