@@ -3,3 +3,5 @@ export * from './analysis-error';
 export * from './lengths';
 export * from './types';
 export * from './units';
+export { fUpperTail, studentTwoSided, studentUpperQuantile } from './distributions';
+export { fitPlane } from './plane-fit';

@@ -1,0 +1,116 @@
+import type { PlaneSolution } from './plane-solution';
+import type { PlanePoint, PointFit } from './types';
+
+/** A point nearer than this to leverage 1 decides its own fitted value: nothing is left over to judge it by. */
+const OWN_FIT = 1e-24;
+
+/** Symmetric hat matrix entry √(wi·wj)·(1/W + pi·pj/Spp + qi·qj/Sqq). */
+function hat(points: readonly PlanePoint[], s: PlaneSolution, i: number, j: number): number {
+  const along = s.sumPP > 0 ? ((s.p[i] ?? 0) * (s.p[j] ?? 0)) / s.sumPP : 0;
+  const across = s.sumQQ > 0 ? ((s.q[i] ?? 0) * (s.q[j] ?? 0)) / s.sumQQ : 0;
+  return Math.sqrt((points[i]?.weight ?? 1) * (points[j]?.weight ?? 1)) * (1 / s.totalWeight + along + across);
+}
+
+/** 1 − h without the cancellation: the hat matrix is idempotent, so h·(1 − h) = Σ of the squares of the row's other entries. */
+function leverageLeft(points: readonly PlanePoint[], s: PlaneSolution, i: number): number {
+  let sum = 0;
+  for (let j = 0; j < points.length; j += 1) {
+    if (j !== i) sum += hat(points, s, i, j) ** 2;
+  }
+  return sum / hat(points, s, i, i);
+}
+
+/**
+ * Σwe² of the fit without point i, summed over the others' own residuals: the short form SSE − e²/(1 − h) keeps no digits where one bust
+ * holds nearly all of SSE. Zero where what is left is rounding noise.
+ */
+function deletedSum(points: readonly PlanePoint[], s: PlaneSolution, i: number, left: number): number {
+  const lifted = (Math.sqrt(points[i]?.weight ?? 1) * (s.residuals[i] ?? 0)) / left;
+  let sum = 0;
+  for (let j = 0; j < points.length; j += 1) {
+    if (j !== i) sum += (Math.sqrt(points[j]?.weight ?? 1) * (s.residuals[j] ?? 0) + hat(points, s, i, j) * lifted) ** 2;
+  }
+  return sum <= s.totalWeight * s.noise * s.noise ? 0 : sum;
+}
+
+/** Internally studentized residual, the external one and Cook's distance; `left` = 1 − leverage. */
+interface Studentized {
+  internal: number | null;
+  external: number | null;
+  cooks: number | null;
+}
+
+function studentize(points: readonly PlanePoint[], s: PlaneSolution, i: number, leverage: number, left: number): Studentized {
+  const df = points.length - s.rank;
+  if (df < 1 || s.sumEE === 0 || left === 0) return { internal: null, external: null, cooks: null };
+  const weighted = Math.sqrt(points[i]?.weight ?? 1) * (s.residuals[i] ?? 0);
+  const internal = weighted / Math.sqrt((s.sumEE / df) * left);
+  const cooks = (internal * internal * leverage) / (s.rank * left);
+  const remaining = df - internal * internal;
+  if (df === 1) return { internal, external: null, cooks };
+  if (remaining > 1e-3 * df) return { internal, external: internal * Math.sqrt((df - 1) / remaining), cooks };
+  const without = deletedSum(points, s, i, left);
+  return { internal, external: without === 0 ? null : weighted / Math.sqrt((without / (df - 1)) * left), cooks };
+}
+
+/**
+ * Everything the contract says of each point, from a careful solution. Null where undefined: no degree of freedom left, an exact fit,
+ * or a point that decides its own fitted value.
+ * Source: Belsley, Kuh & Welsch, Regression Diagnostics (1980), ch. 2 (from memory); R's hatvalues, rstandard, rstudent, cooks.distance.
+ */
+export function carefulPointFits(points: readonly PlanePoint[], s: PlaneSolution): PointFit[] {
+  return points.map((point, i) => {
+    const own = Math.min(1, hat(points, s, i, i));
+    const near = own > 0.9 ? leverageLeft(points, s, i) : 1 - own;
+    const left = near < OWN_FIT ? 0 : near;
+    const residual = left === 0 ? 0 : (s.residuals[i] ?? 0);
+    const leverage = own > 0.9 ? 1 - left : own;
+    const { internal, external, cooks } = studentize(points, s, i, leverage, left);
+    return {
+      id: point.id,
+      fitted: point.z - residual,
+      residual,
+      leverage,
+      studentized: internal,
+      deletedStudentized: external,
+      cooks,
+    };
+  });
+}
+
+/**
+ * The same of a quick solution, in one pass of plain arithmetic; null where a point comes so near leverage 1, or holds so much of the
+ * whole sum, that digits would be lost.
+ */
+export function quickPointFits(points: readonly PlanePoint[], s: PlaneSolution): PointFit[] | null {
+  const { p, q, residuals, totalWeight, sumPP, sumQQ, sumEE, rank } = s;
+  const df = points.length - rank;
+  const variance = sumEE / df;
+  const perPP = 1 / sumPP;
+  const perQQ = 1 / sumQQ;
+  const perWeight = 1 / totalWeight;
+  const fits: PointFit[] = [];
+  let i = 0;
+  for (const { id, z, weight = 1 } of points) {
+    const along = p[i] ?? 0;
+    const across = q[i] ?? 0;
+    const residual = residuals[i] ?? 0;
+    i += 1;
+    const leverage = weight * (perWeight + along * along * perPP + across * across * perQQ);
+    const left = 1 - leverage;
+    const squared = (weight * residual * residual) / (variance * left);
+    const remaining = df - squared;
+    if (left < 1e-3 || (df > 1 && remaining < 1e-5 * df)) return null;
+    const studentized = Math.sign(residual) * Math.sqrt(squared);
+    fits.push({
+      id,
+      fitted: z - residual,
+      residual,
+      leverage,
+      studentized,
+      deletedStudentized: df > 1 ? studentized * Math.sqrt((df - 1) / remaining) : null,
+      cooks: (squared * leverage) / (rank * left),
+    });
+  }
+  return fits;
+}
