@@ -1,6 +1,9 @@
 /** The maths of the product: pure functions on whole nanometres. docs/maths.md explains each result. */
 export * from './analysis-error';
 export * from './lengths';
+export { cornerLetter, diagonals, traceOutline, type Diagonal } from './outline';
+export * from './outline-offset';
+export * from './stations-along';
 export * from './types';
 export * from './units';
 export { fUpperTail, studentTwoSided, studentUpperQuantile } from './distributions';

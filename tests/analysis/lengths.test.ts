@@ -1,4 +1,4 @@
-import fc from 'fast-check';
+import * as fc from 'fast-check';
 import { AnalysisError, formatLength, parseLength, type LengthStyle } from '@/analysis';
 
 const INCH = 25_400_000;
