@@ -1,0 +1,5 @@
+import { SignUpScreen } from '@/components/auth/sign-up-screen';
+
+export default function SignUpRoute() {
+  return <SignUpScreen />;
+}

@@ -1,0 +1,37 @@
+import { Redirect, usePathname } from 'expo-router';
+import type { ReactNode } from 'react';
+import { useTranslation } from 'react-i18next';
+import { AppShell } from '@/components/shell/app-shell';
+import { Brand } from '@/components/shell/brand';
+import { ErrorState } from '@/components/ui/error-state';
+import { LoadingState } from '@/components/ui/loading-state';
+import { Screen } from '@/components/ui/screen';
+import { useSession } from '@/hooks/session/use-session';
+import { startSession } from '@/hooks/session/use-session-start';
+import { roleWords } from './role-words';
+
+/** The shell, for whoever is signed in; anybody else is asked to sign in and comes back to the address they wanted. */
+export function SignedInOnly({ children }: { children: ReactNode }) {
+  const session = useSession();
+  const pathname = usePathname();
+  const { t } = useTranslation('auth');
+  if (session.status === 'signed-out') {
+    return <Redirect href={pathname === '/' ? '/sign-in' : { pathname: '/sign-in', params: { next: pathname } }} />;
+  }
+  if (session.status === 'signed-in') {
+    const { me } = session;
+    return (
+      <AppShell signedInAs={roleWords(me.roles)} company={me.company.name}>
+        {children}
+      </AppShell>
+    );
+  }
+  if (session.reached) return <LoadingState label={t('session.starting')} />;
+  return (
+    <Screen title={t('session.noSignal')} brand={<Brand />} maxWidth={560}>
+      <ErrorState title={t('session.notReached')} onRetry={() => void startSession()}>
+        {t('session.notReachedHow')}
+      </ErrorState>
+    </Screen>
+  );
+}
