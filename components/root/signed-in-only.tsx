@@ -6,6 +6,7 @@ import { Brand } from '@/components/shell/brand';
 import { ErrorState } from '@/components/ui/error-state';
 import { LoadingState } from '@/components/ui/loading-state';
 import { Screen } from '@/components/ui/screen';
+import { useOutboxRunner } from '@/hooks/outbox/use-outbox';
 import { useSession } from '@/hooks/session/use-session';
 import { startSession } from '@/hooks/session/use-session-start';
 import { roleWords } from './role-words';
@@ -15,6 +16,7 @@ export function SignedInOnly({ children }: { children: ReactNode }) {
   const session = useSession();
   const pathname = usePathname();
   const { t } = useTranslation('auth');
+  useOutboxRunner();
   if (session.status === 'signed-out') {
     return <Redirect href={pathname === '/' ? '/sign-in' : { pathname: '/sign-in', params: { next: pathname } }} />;
   }

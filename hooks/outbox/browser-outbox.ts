@@ -15,6 +15,11 @@ const post: OutboxParts['post'] = async (roundId, kept) => {
   return (await callApi('sendRecords', { params: { roundId }, body })).answers;
 };
 
+/** As if nobody had caught it: it reaches the console and whoever listens for faults of the page. */
+function report(error: unknown): void {
+  if (typeof reportError === 'function') reportError(error);
+}
+
 function create(): Outbox {
   const channel = typeof BroadcastChannel === 'undefined' ? null : new BroadcastChannel(CHANNEL);
   const outbox = new Outbox({
@@ -27,7 +32,7 @@ function create(): Outbox {
       return () => clearTimeout(timer);
     },
     tell: (news) => channel?.postMessage(news),
-    report: (error) => reportError(error),
+    report,
   });
   channel?.addEventListener('message', (event: MessageEvent<OutboxNews>) => void outbox.heard(event.data));
   window.addEventListener('online', () => outbox.send());
