@@ -1,0 +1,172 @@
+import type { Nm } from '@/analysis';
+import { axisHeight, textWidth } from './axis-text';
+import type { ChartTolerance, ChartUnits, ProfileCorner, ProfilePoint } from './chart-types';
+import type { PlacedMark } from './mark-shapes';
+
+/** Sides of the drawn field within the picture, in px. */
+export interface FieldBox {
+  left: number;
+  right: number;
+  top: number;
+  bottom: number;
+}
+
+export interface ProfileInput {
+  points: readonly ProfilePoint[];
+  corners: readonly ProfileCorner[];
+  /** The whole walk round the footing. */
+  length: Nm;
+  tolerance: ChartTolerance;
+  units: ChartUnits;
+  /** Size of the picture, in px. */
+  width: number;
+  height: number;
+  /** Size of the axis text, in px; 13 unless said. */
+  fontSize?: number;
+  /** Part of the walk that is shown; the whole unless said. */
+  view?: { from: Nm; to: Nm };
+}
+
+export interface ProfileMark extends PlacedMark {
+  id: string;
+  /** Drawn at the edge because the reading lies beyond the picture: which way. */
+  beyond: 'above' | 'below' | null;
+}
+
+export interface ProfileGeometry {
+  field: FieldBox;
+  /** Range of heights in the field. */
+  heights: { low: Nm; high: Nm };
+  view: { from: Nm; to: Nm };
+  /** How many times heights are drawn larger than distances, a round number. */
+  exaggeration: number;
+  /** y of plan grade. */
+  grade: number;
+  band: { top: number; bottom: number };
+  ticks: { height: Nm; y: number; label: string }[];
+  verticals: { x: number; label: string | null; labelX: number; anchor: 'start' | 'middle' | 'end' }[];
+  /** SVG path through the shots; broken where a station was not shot. */
+  trace: string;
+  marks: ProfileMark[];
+  x: (at: Nm) => number;
+  y: (height: Nm) => number;
+}
+
+/** Heights beyond this many tolerances are drawn at the edge: a misread foot must not flatten everything else. */
+const mostTolerances = 8;
+const roundSteps = [1, 1.2, 1.5, 2, 2.5, 3, 4, 5, 6, 8];
+
+/** The largest round number (1, 1.2, 1.5 … 8 times a power of ten) that is at most `value`. */
+export function roundDown(value: number): number {
+  const power = 10 ** Math.floor(Math.log10(value));
+  const step = [...roundSteps].reverse().find((candidate) => candidate * power <= value * (1 + 1e-12)) ?? 1;
+  return Number((step * power).toPrecision(3));
+}
+
+/** Range of heights to show: the tolerance with as much again outside it, and every reading within reason. */
+export function heightRange(points: readonly ProfilePoint[], tolerance: ChartTolerance): { low: Nm; high: Nm } {
+  const unit = Math.max(tolerance.low, tolerance.high, 1);
+  const seen = points.flatMap(({ deviation }) => (deviation === null ? [] : [deviation]));
+  const reach = (far: number, own: Nm) => Math.max(own * 2.2, Math.min(far * 1.2, unit * mostTolerances), unit * 0.9);
+  return {
+    low: -reach(Math.max(0, ...seen.map((value) => -value)), tolerance.low),
+    high: reach(Math.max(0, ...seen), tolerance.high),
+  };
+}
+
+/** Heights that get a number: whole tolerances out from grade, in steps that leave each label its line of text. */
+function tickHeights(range: { low: Nm; high: Nm }, tolerance: ChartTolerance, pxPerNm: number, fontSize: number): Nm[] {
+  const unit = Math.max(tolerance.low, tolerance.high);
+  if (unit <= 0) return [];
+  let step = unit;
+  while (step * pxPerNm < fontSize * 0.85) step *= 2;
+  const heights: Nm[] = [];
+  for (let k = 1; k * step <= Math.max(range.high, -range.low); k += 1) {
+    if (k * step <= range.high * 0.98) heights.push(k * step);
+    if (-k * step >= range.low * 0.98) heights.push(-k * step);
+  }
+  return heights.sort((a, b) => b - a);
+}
+
+/** Places the corners' names along the bottom, from the left, each only where it does not touch the one before. */
+function placeLabels(corners: readonly { x: number; label: string }[], field: FieldBox, fontSize: number) {
+  let free = -Infinity;
+  return corners.map(({ x, label }) => {
+    for (const text of [label, label.split(' ')[0] ?? label]) {
+      const width = textWidth(text, fontSize);
+      const left = Math.min(Math.max(x - width / 2, field.left), field.right + 6 - width);
+      if (left < free) continue;
+      free = left + width + fontSize * 0.5;
+      return { x, label: text, labelX: left + width / 2, anchor: 'middle' as const };
+    }
+    return { x, label: null, labelX: x, anchor: 'middle' as const };
+  });
+}
+
+function tracePath(points: readonly ProfilePoint[], marks: readonly ProfileMark[]): string {
+  let path = '';
+  let pen = 'M';
+  points.forEach((point, index) => {
+    const mark = marks[index];
+    if (point.deviation === null || !mark) {
+      pen = 'M';
+      return;
+    }
+    path += `${pen}${mark.x.toFixed(1)} ${mark.y.toFixed(1)}`;
+    pen = 'L';
+  });
+  return path;
+}
+
+/**
+ * The footing unrolled: walking round it is left to right, heights are drawn larger by a round number that the picture says.
+ * Pure; the phone's strip, the results' chart and the page on paper are all drawn from it. Points come in walking order.
+ */
+export function profileGeometry(input: ProfileInput): ProfileGeometry {
+  const { points, tolerance, units, width, height, fontSize = 13 } = input;
+  const view = input.view ?? { from: 0, to: Math.max(input.length, 1) };
+  const range = heightRange(points, tolerance);
+  const unit = Math.max(tolerance.low, tolerance.high);
+  const gutter = Math.max(...[unit, -2 * unit].map((value) => textWidth(axisHeight(value, units.style), fontSize))) + 12;
+  const field: FieldBox = {
+    left: gutter,
+    right: Math.max(width - 10, gutter + 1),
+    top: 6,
+    bottom: Math.max(height - fontSize - 9, 7),
+  };
+  const perNmAlong = (field.right - field.left) / (view.to - view.from);
+  const room = (field.bottom - field.top) / (range.high - range.low);
+  const exaggeration = roundDown(room / perNmAlong);
+  const perNm = exaggeration * perNmAlong;
+  const spare = field.bottom - field.top - perNm * (range.high - range.low);
+  const grade = field.top + spare / 2 + perNm * range.high;
+  const x = (at: Nm) => field.left + (at - view.from) * perNmAlong;
+  const y = (value: Nm) => grade - value * perNm;
+  const shown = { low: (grade - field.bottom) / perNm, high: (grade - field.top) / perNm };
+  const marks = points.map((point): ProfileMark => {
+    const value = point.deviation ?? 0;
+    const beyond = value > shown.high ? 'above' : value < shown.low ? 'below' : null;
+    const at = y(Math.min(Math.max(value, shown.low), shown.high));
+    const { id, mark, close, suspect } = point;
+    return { id, mark: point.deviation === null ? 'not-shot' : mark, close, suspect, beyond, x: x(point.at), y: at };
+  });
+  const inView = input.corners.filter(({ at }) => at >= view.from && at <= view.to).map(({ at, label }) => ({ x: x(at), label }));
+  return {
+    field,
+    heights: shown,
+    view,
+    exaggeration,
+    grade,
+    band: { top: y(tolerance.high), bottom: y(-tolerance.low) },
+    ticks: tickHeights(shown, tolerance, perNm, fontSize).map((value) => ({
+      height: value,
+      y: y(value),
+      label: axisHeight(value, units.style),
+    })),
+    verticals: placeLabels(inView, field, fontSize),
+    trace: tracePath(points, marks),
+    marks,
+    x,
+    y,
+  };
+}

@@ -1,0 +1,93 @@
+import { useTranslation } from 'react-i18next';
+import { View } from 'react-native';
+import Svg, { G, Path, Rect, Text as SvgText } from 'react-native-svg';
+import type { Nm } from '@/analysis';
+import { fonts } from '@/constants/fonts';
+import { typeSize } from '@/constants/theme';
+import { useTokens } from '@/hooks/use-tokens';
+import type { ChartTolerance, ChartUnits, ProfileCorner, ProfilePoint } from './chart-types';
+import { describeProfile, stationWords } from './describe-profile';
+import { Marks, StringLine } from './marks';
+import { profileGeometry, type ProfileGeometry } from './profile-geometry';
+import { useMeasuredWidth } from './use-measured-width';
+
+interface ProfileStripProps {
+  /** In walking order. */
+  points: readonly ProfilePoint[];
+  corners: readonly ProfileCorner[];
+  /** The whole walk round the footing. */
+  length: Nm;
+  tolerance: ChartTolerance;
+  units: ChartUnits;
+  /** Station being shot: a dotted vertical. */
+  currentId?: string;
+  /** In px; 88 unless said. */
+  height?: number;
+}
+
+/** The footing unrolled, in a strip: what has been shot hangs over or under the string line, the rest are ticks on it. */
+export function ProfileStrip({ height = 88, currentId, ...data }: ProfileStripProps) {
+  const { t } = useTranslation('charts');
+  const [width, onLayout] = useMeasuredWidth();
+  const geometry = profileGeometry({ ...data, width, height });
+  const current = data.points.find(({ id }) => id === currentId);
+  const spoken = [
+    describeProfile(data.points, data.units, t),
+    current ? t('profile.now', { station: stationWords(current, data.units, t) }) : null,
+  ];
+  return (
+    <View onLayout={onLayout} style={{ height }}>
+      <Svg width={width} height={height} role="img" aria-label={spoken.filter((part) => part !== null).join(' ')}>
+        <ProfileGround geometry={geometry} />
+        <StringLine from={geometry.field.left} to={geometry.field.right} y={geometry.grade} />
+        <ProfileTrace geometry={geometry} />
+        <Marks marks={geometry.marks} />
+        {current ? <CurrentStation x={geometry.x(current.at)} height={geometry.field.bottom} /> : null}
+      </Svg>
+    </View>
+  );
+}
+
+/** What lies under the shots: the band of tolerance, the corners, the heights. */
+export function ProfileGround({ geometry }: { geometry: ProfileGeometry }) {
+  const tokens = useTokens();
+  const { field, band } = geometry;
+  const text = { fontFamily: fonts.figureMedium, fontSize: typeSize.tiny, fill: tokens.ink2 };
+  const lines = geometry.verticals.map(({ x }) => `M${x.toFixed(1)} ${field.top}V${field.bottom}`).join('');
+  return (
+    <G>
+      <Rect
+        x={field.left}
+        y={Math.max(band.top, field.top)}
+        width={field.right - field.left}
+        height={Math.max(Math.min(band.bottom, field.bottom) - Math.max(band.top, field.top), 0)}
+        fill={tokens.onTint}
+      />
+      <Path d={lines} stroke={tokens.rule} strokeWidth={1} fill="none" />
+      {geometry.ticks.map((tick) => (
+        <SvgText key={tick.height} x={field.left - 8} y={tick.y + 4.5} textAnchor="end" {...text}>
+          {tick.label}
+        </SvgText>
+      ))}
+      {geometry.verticals.map(({ x, label, labelX, anchor }) =>
+        label === null ? null : (
+          <SvgText key={`${label} ${x}`} x={labelX} y={field.bottom + typeSize.tiny + 3} textAnchor={anchor} {...text}>
+            {label}
+          </SvgText>
+        ),
+      )}
+    </G>
+  );
+}
+
+/** The line from shot to shot. */
+export function ProfileTrace({ geometry }: { geometry: ProfileGeometry }) {
+  return <Path d={geometry.trace} stroke={useTokens().ink} strokeWidth={1.4} strokeLinejoin="round" fill="none" />;
+}
+
+/** You are here. */
+export function CurrentStation({ x, height }: { x: number; height: number }) {
+  return (
+    <Path d={`M${x.toFixed(1)} 2V${height}`} stroke={useTokens().ink} strokeWidth={2.4} strokeDasharray="2.4 3.2" fill="none" />
+  );
+}
