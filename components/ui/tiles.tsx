@@ -1,0 +1,20 @@
+import { Children, type ReactNode } from 'react';
+import { StyleSheet, View } from 'react-native';
+import { space } from '@/constants/theme';
+
+/** Cards of one kind, as many beside one another as there is room for at `least` px each. */
+export function Tiles({ children, least = 320 }: { children: ReactNode; least?: number }) {
+  return (
+    <View style={styles.tiles}>
+      {Children.map(children, (child) => (
+        <View style={[styles.tile, { flexBasis: least }]}>{child}</View>
+      ))}
+    </View>
+  );
+}
+
+const styles = StyleSheet.create({
+  tiles: { flexDirection: 'row', flexWrap: 'wrap', gap: space.m },
+  // Grows to fill its row and shrinks under `least` on a narrow phone.
+  tile: { flexGrow: 1, flexShrink: 1, minWidth: 0, maxWidth: '100%' },
+});
