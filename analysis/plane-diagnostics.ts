@@ -1,4 +1,5 @@
-import type { PlaneSolution } from './plane-solution';
+import { type PlaneSolution, measureExtent } from './plane-solution';
+import { solveCarefully } from './plane-solve-careful';
 import type { PlanePoint, PointFit } from './types';
 
 /** A point nearer than this to leverage 1 decides its own fitted value: nothing is left over to judge it by. */
@@ -21,16 +22,12 @@ function leverageLeft(points: readonly PlanePoint[], s: PlaneSolution, i: number
 }
 
 /**
- * Σwe² of the fit without point i, summed over the others' own residuals: the short form SSE − e²/(1 − h) keeps no digits where one bust
- * holds nearly all of SSE. Zero where what is left is rounding noise.
+ * Σwe² of the fit without point i, by fitting without it: the short form SSE − e²/(1 − h) keeps no digits where one bust holds nearly
+ * all of SSE. Zero where what is left is rounding noise.
  */
-function deletedSum(points: readonly PlanePoint[], s: PlaneSolution, i: number, left: number): number {
-  const lifted = (Math.sqrt(points[i]?.weight ?? 1) * (s.residuals[i] ?? 0)) / left;
-  let sum = 0;
-  for (let j = 0; j < points.length; j += 1) {
-    if (j !== i) sum += (Math.sqrt(points[j]?.weight ?? 1) * (s.residuals[j] ?? 0) + hat(points, s, i, j) * lifted) ** 2;
-  }
-  return sum <= s.totalWeight * s.noise * s.noise ? 0 : sum;
+function deletedSum(points: readonly PlanePoint[], i: number): number {
+  const others = points.filter((_, j) => j !== i);
+  return solveCarefully(others, measureExtent(others)).sumEE;
 }
 
 /** Internally studentized residual, the external one and Cook's distance; `left` = 1 − leverage. */
@@ -49,7 +46,7 @@ function studentize(points: readonly PlanePoint[], s: PlaneSolution, i: number, 
   const remaining = df - internal * internal;
   if (df === 1) return { internal, external: null, cooks };
   if (remaining > 1e-3 * df) return { internal, external: internal * Math.sqrt((df - 1) / remaining), cooks };
-  const without = deletedSum(points, s, i, left);
+  const without = deletedSum(points, i);
   return { internal, external: without === 0 ? null : weighted / Math.sqrt((without / (df - 1)) * left), cooks };
 }
 

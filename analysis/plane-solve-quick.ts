@@ -1,8 +1,11 @@
 import { type Extent, type PlaneSolution } from './plane-solution';
 import type { PlanePoint } from './types';
 
-/** A result that is this much smaller than its terms has lost four digits to cancellation: about as many as may go. */
-const CANCELLED = 1e-4;
+/** A result smaller than this share of its terms has lost five digits to cancellation: as many as may go if nine are to stay. */
+const CANCELLED = 1e-5;
+
+/** Long sums are taken in blocks, so that their rounding does not grow with the number of stations. */
+const BLOCK = 256;
 
 interface Sums {
   totalWeight: number;
@@ -36,27 +39,28 @@ function meansFromFirst(points: readonly PlanePoint[], first: PlanePoint): Means
   return { x: x / weights, y: y / weights, z: z / weights };
 }
 
-/** Fills the three arrays with the deviations from the means and sums their products. */
-function centredSums(
+/** Deviations from the means of the points from `start` on, one block of them, written to the arrays and summed by products. */
+function blockSums(
   points: readonly PlanePoint[],
-  first: PlanePoint,
-  means: Means,
+  start: number,
+  first: Means,
+  mean: Means,
   dx: Float64Array,
   dy: Float64Array,
   dz: Float64Array,
 ): Sums {
-  const sums: Sums = { totalWeight: 0, xx: 0, yy: 0, xy: 0, xz: 0, yz: 0, zz: 0 };
-  let { totalWeight, xx, yy, xy, xz, yz, zz } = sums;
-  let i = 0;
-  for (const point of points) {
+  let [totalWeight, xx, yy, xy, xz, yz, zz] = [0, 0, 0, 0, 0, 0, 0];
+  const end = Math.min(points.length, start + BLOCK);
+  for (let i = start; i < end; i += 1) {
+    const point = points[i];
+    if (point === undefined) break;
     const weight = point.weight ?? 1;
-    const x = point.x - first.x - means.x;
-    const y = point.y - first.y - means.y;
-    const z = point.z - first.z - means.z;
+    const x = point.x - first.x - mean.x;
+    const y = point.y - first.y - mean.y;
+    const z = point.z - first.z - mean.z;
     dx[i] = x;
     dy[i] = y;
     dz[i] = z;
-    i += 1;
     totalWeight += weight;
     const wx = weight * x;
     const wy = weight * y;
@@ -68,6 +72,28 @@ function centredSums(
     zz += weight * z * z;
   }
   return { totalWeight, xx, yy, xy, xz, yz, zz };
+}
+
+function centredSums(
+  points: readonly PlanePoint[],
+  first: PlanePoint,
+  means: Means,
+  dx: Float64Array,
+  dy: Float64Array,
+  dz: Float64Array,
+): Sums {
+  const sums = blockSums(points, 0, first, means, dx, dy, dz);
+  for (let start = BLOCK; start < points.length; start += BLOCK) {
+    const block = blockSums(points, start, first, means, dx, dy, dz);
+    sums.totalWeight += block.totalWeight;
+    sums.xx += block.xx;
+    sums.yy += block.yy;
+    sums.xy += block.xy;
+    sums.xz += block.xz;
+    sums.yz += block.yz;
+    sums.zz += block.zz;
+  }
+  return sums;
 }
 
 /** Whether a sum of products stands clear of the rounding of its terms, by Cauchy–Schwarz: |Σab| against √(Σa²·Σb²). */
@@ -100,7 +126,7 @@ function sweepResiduals(
 
 /**
  * The plane by plain doubles, three passes: centre on the first point, then on the mean, orthogonalise, sweep. Null where that would lose
- * more than four digits anywhere (nearly straight rows, almost exact planes, a coefficient near zero, too few points): the careful solver
+ * more than five digits anywhere (nearly straight rows, almost exact planes, a coefficient near zero, too few points): the careful solver
  * answers there, and alone decides what geometry carries.
  */
 export function solveQuickly(points: readonly PlanePoint[], extent: Extent): PlaneSolution | null {
@@ -139,7 +165,8 @@ export function solveQuickly(points: readonly PlanePoint[], extent: Extent): Pla
   if (Math.abs(meanZ) < CANCELLED * Math.abs(origin.z) || Math.abs(atOrigin) < CANCELLED * terms) return null;
   const reachAcross = Math.max(Math.abs(meanO), Math.abs(shear * meanP));
   // It matters only where it is what makes the standard error of `a`: 1/W + meanP²/Spp + originAcross²/Sqq.
-  if (Math.abs(originAcross) < CANCELLED * reachAcross && reachAcross * reachAcross * totalWeight > 1e4 * sumQQ) return null;
+  if (Math.abs(originAcross) < CANCELLED * reachAcross && reachAcross * reachAcross * totalWeight > sumQQ / CANCELLED)
+    return null;
   return {
     model: 'plane',
     rank: 3,
