@@ -86,7 +86,8 @@ function beyond(deviation: Nm, rule: RoundBundle['toleranceRule']): Nm {
 function gradeAnswer(state: RoundState, rule: RoundBundle['toleranceRule']): GradeAnswer {
   const judged = state.targets.filter(hasDeviation);
   const worst = judged.reduce<(typeof judged)[number] | null>(
-    (found, target) => (found && beyond(found.deciding.deviation, rule) >= beyond(target.deciding.deviation, rule) ? found : target),
+    (found, target) =>
+      found && beyond(found.deciding.deviation, rule) >= beyond(target.deciding.deviation, rule) ? found : target,
     null,
   );
   return { verdict: state.verdict, shot: state.shot, of: state.of, out: state.out, close: state.close, worst };
@@ -138,7 +139,8 @@ function shapeOf(bundle: RoundBundle, state: RoundState): Shape | null {
     fallAzimuth: fit.tilt.fallAzimuth,
     rest: fit.points.reduce((most, point) => Math.max(most, Math.abs(point.residual)), 0),
     mostly: largest === 0 ? null : largest === offset ? 'offset' : largest === tilt ? 'tilt' : 'rest',
-    againstLaser: laser && fit.model !== 'level' ? tiltAgainstLaser(fit, { accuracy: laser.accuracy, at: laser.accuracyAt }) : null,
+    againstLaser:
+      laser && fit.model !== 'level' ? tiltAgainstLaser(fit, { accuracy: laser.accuracy, at: laser.accuracyAt }) : null,
   };
 }
 

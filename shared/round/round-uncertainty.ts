@@ -28,7 +28,7 @@ export function planReach(places: readonly Place[]): PlanReach {
  * never flatters a shot from the middle. A benchmark whose distance is not known counts as that far away too.
  */
 export function roundShotUncertainty(
-  shot: { record: ReadingRecord; place: Place; series: SeriesRecord; setup: SetupRecord },
+  shot: { record: Pick<ReadingRecord, 'how' | 'receiver'>; place: Place; series: SeriesRecord; setup: SetupRecord },
   context: RoundContext,
   reach: PlanReach,
 ): { absolute: Nm; relative: Nm } | null {

@@ -46,7 +46,10 @@ function placesByRun(footing: Footing, targets: RoundTarget[]): { runId: string;
  */
 export function segmentsOf(footing: Footing, targets: RoundTarget[], rail: Rail): Segment[] {
   const suffix = rail === 'centre' ? '' : `/${rail}`;
-  return placesByRun(footing, targets.filter((target) => target.rail === rail)).flatMap(({ runId, places }) => {
+  return placesByRun(
+    footing,
+    targets.filter((target) => target.rail === rail),
+  ).flatMap(({ runId, places }) => {
     const pieces: Place[][] = [[]];
     for (const place of places) {
       if (place.station.step === 'after') pieces.push([]);
@@ -62,7 +65,9 @@ export function segmentsOf(footing: Footing, targets: RoundTarget[], rail: Rail)
           rail,
           planGrade: first.station.planGrade,
           targets: piece.map((place) => place.target),
-          distances: piece.map((place) => Math.round(Math.hypot(place.target.x - first.target.x, place.target.y - first.target.y))),
+          distances: piece.map((place) =>
+            Math.round(Math.hypot(place.target.x - first.target.x, place.target.y - first.target.y)),
+          ),
         },
       ];
     });
