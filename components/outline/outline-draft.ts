@@ -1,3 +1,4 @@
+import { z } from 'zod';
 import type { Nm } from '@/analysis';
 import type { Run } from '@/shared/api/footing-schemas';
 
@@ -5,38 +6,38 @@ import type { Run } from '@/shared/api/footing-schemas';
  * A field as it is typed. `kept` is the exact length that an untouched text stands for: a length that is shown to the mark
  * (13.411 m in a feet-and-inches job) must not change because somebody opened the outline and saved it again.
  */
-export interface Entry {
-  text: string;
-  kept: Nm | null;
-}
+const entrySchema = z.strictObject({ text: z.string(), kept: z.int().nullable() });
+export type Entry = z.infer<typeof entrySchema>;
 
-export type Way = 'right' | 'left' | 'straight';
+const waySchema = z.enum(['right', 'left', 'straight']);
+export type Way = z.infer<typeof waySchema>;
 
-export interface DraftStep {
-  id: string;
-  at: Entry;
-  by: Entry;
-  direction: 'up' | 'down';
-}
+const draftStepSchema = z.strictObject({ id: z.string(), at: entrySchema, by: entrySchema, direction: z.enum(['up', 'down']) });
+export type DraftStep = z.infer<typeof draftStepSchema>;
 
 /** One run as it stands on the screen. `angle` is the turn's size in degrees as typed; which way it goes is `way`. */
-export interface DraftRun {
-  id: string;
-  length: Entry;
-  way: Way;
-  angle: string;
-  width: Entry;
-  thickness: Entry;
-  steps: DraftStep[];
-}
+const draftRunSchema = z.strictObject({
+  id: z.string(),
+  length: entrySchema,
+  way: waySchema,
+  angle: z.string(),
+  width: entrySchema,
+  thickness: entrySchema,
+  steps: z.array(draftStepSchema),
+});
+export type DraftRun = z.infer<typeof draftRunSchema>;
+
+/** What a browser keeps of an outline that is not saved yet. */
+export const keptOutlineSchema = z.strictObject({ version: z.int(), runs: z.array(draftRunSchema) });
 
 /** The outline as it is being drawn. Everything typed is kept as text, so that a refused entry loses nothing. */
 export interface OutlineDraft {
   runs: DraftRun[];
   /** The outline version on the server that this was drawn over. */
   version: number;
-  /** The run that is open for editing. */
+  /** The run that is open for editing, and the one that was closed last. */
   open: string | null;
+  closed: string | null;
   /** Changed since it was loaded or saved. */
   dirty: boolean;
   /** Fields whose refusal is shown: left once, or asked for by saving. */
@@ -94,7 +95,15 @@ export function draftRun(run: Run, show: (length: Nm) => string): DraftRun {
   };
 }
 
-export const emptyDraft: OutlineDraft = { runs: [], version: 0, open: null, dirty: false, left: [], setAside: null };
+export const emptyDraft: OutlineDraft = {
+  runs: [],
+  version: 0,
+  open: null,
+  closed: null,
+  dirty: false,
+  left: [],
+  setAside: null,
+};
 
 const withRuns = (draft: OutlineDraft, runs: DraftRun[]): OutlineDraft => ({ ...draft, runs, dirty: true });
 
@@ -119,7 +128,7 @@ export function outlineReducer(draft: OutlineDraft, action: OutlineAction): Outl
     case 'saved':
       return { ...draft, version: action.version, dirty: false, setAside: null };
     case 'open':
-      return { ...draft, open: action.runId };
+      return { ...draft, open: action.runId, closed: draft.open };
     case 'add-run':
       return { ...withRuns(draft, [...draft.runs, newRun(action.id)]), open: action.id };
     case 'remove-run':

@@ -2,19 +2,13 @@ import { AnalysisError, NM_PER_INCH, NM_PER_MILE, traceOutline, type Nm, type Tr
 import type { Run } from '@/shared/api/footing-schemas';
 import type { DraftRun, DraftStep, Entry } from './outline-draft';
 
-/** Why an entry was not taken: a code of the catalogue with the numbers that its sentence needs. */
-export interface Refusal {
-  code: string;
-  details: Record<string, unknown>;
-}
-
 export interface ReadOutline {
   /** The runs from the first on that can be drawn: it ends before the first without a length. */
   drawn: Run[];
   /** Every field of every run reads, and there is a run. */
   complete: boolean;
-  /** By field: see `fieldOf` and `stepFieldOf`. */
-  refusals: Readonly<Record<string, Refusal>>;
+  /** Why a field was not taken, by field: see `fieldOf` and `stepFieldOf`. */
+  refusals: Readonly<Record<string, AnalysisError>>;
 }
 
 export const fieldOf = (runId: string, field: 'length' | 'angle' | 'width' | 'thickness') => `${runId}.${field}`;
@@ -90,13 +84,13 @@ function readRun(run: DraftRun, read: ReadLength, take: Take): Run | null {
 
 /** Reads every field of the draft, and says of each that does not read why not. */
 export function readOutline(runs: readonly DraftRun[], read: ReadLength): ReadOutline {
-  const refusals: Record<string, Refusal> = {};
+  const refusals: Record<string, AnalysisError> = {};
   const take: Take = (field, get) => {
     try {
       return get();
     } catch (error) {
       if (!(error instanceof AnalysisError)) throw error;
-      refusals[field] = { code: error.code, details: error.details };
+      refusals[field] = error;
       return null;
     }
   };
@@ -115,21 +109,20 @@ export type OutlineState =
   | { kind: 'misses'; traced: TracedOutline; by: Nm; mends: { runId: string; number: number; length: Nm }[] }
   | { kind: 'crosses'; traced: TracedOutline };
 
-/** What the tape can tell: a gap of the mark it is read to, or of a right angle's rounding, is no misclosure. */
-export const closesWithin = (graduation: Nm): Nm => graduation;
-
-/** Where the outline stands. A misclosure comes with every single run that would close it, its new length to the mark. */
+/**
+ * Where the outline stands. A misclosure comes with every single run that would close it. Less than the mark that the tape is
+ * read to is none: a turn of 45° brings its runs to no mark.
+ */
 export function outlineState(runs: readonly Run[], graduation: Nm): OutlineState {
   if (runs.length === 0) return { kind: 'empty' };
-  const traced = traceOutline([...runs]);
+  const traced = traceOutline([...runs], { closesWithin: graduation });
   if (traced.selfCrossing) return { kind: 'crosses', traced };
-  const turned = runs.reduce((sum, run) => sum + run.turn, 0);
-  if (Math.abs(traced.closure.angle) > 1e-6) return { kind: 'strip', traced, turned };
-  if (traced.closure.length <= closesWithin(graduation)) return { kind: 'closes', traced };
-  const mends = traced.mends.map((mend) => ({
-    runId: mend.run,
-    number: runs.findIndex((run) => run.id === mend.run) + 1,
-    length: Math.round(mend.length),
+  if (traced.closure.angle !== 0) return { kind: 'strip', traced, turned: runs.reduce((sum, run) => sum + run.turn, 0) };
+  if (traced.closure.length <= graduation) return { kind: 'closes', traced };
+  const mends = traced.mends.map(({ run, length }) => ({
+    runId: run,
+    number: runs.findIndex(({ id }) => id === run) + 1,
+    length,
   }));
   return { kind: 'misses', traced, by: Math.round(traced.closure.length), mends };
 }

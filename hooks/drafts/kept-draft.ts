@@ -1,0 +1,43 @@
+import type { z } from 'zod';
+
+/**
+ * What is typed on a long form is kept in this browser until it is saved, so that a reload or a call in the trench loses nothing.
+ * Field records do not come this way: they have the outbox, which is durable.
+ */
+const keyOf = (name: string) => `draft:${name}`;
+
+/** Browsers in private windows, and phones that are full, have no store to give. */
+function store(): Storage | null {
+  try {
+    return globalThis.localStorage ?? null;
+  } catch {
+    return null;
+  }
+}
+
+/** Whether it is now kept; false where the browser has no room for it. */
+export function keepDraft(name: string, draft: unknown): boolean {
+  try {
+    const here = store();
+    here?.setItem(keyOf(name), JSON.stringify(draft));
+    return here !== null;
+  } catch {
+    return false;
+  }
+}
+
+/** What was kept under this name, or null when there is nothing, or nothing that this version of the app can read. */
+export function keptDraft<S extends z.ZodType>(name: string, schema: S): z.output<S> | null {
+  const text = store()?.getItem(keyOf(name)) ?? null;
+  if (text === null) return null;
+  try {
+    return schema.parse(JSON.parse(text));
+  } catch {
+    forgetDraft(name);
+    return null;
+  }
+}
+
+export function forgetDraft(name: string): void {
+  store()?.removeItem(keyOf(name));
+}
