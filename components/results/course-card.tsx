@@ -13,7 +13,7 @@ import type { WallResult } from '@/shared/round/round-results';
 import { LengthField, lengthRefusal } from '../lengths/length-field';
 import { printSmall } from '../lengths/print-length';
 import { readLength } from '../lengths/read-length';
-import { groupGrade, heightWords, rangeWords, runLengthWords, toMark, volumeWords, windowInMarks } from './results-words';
+import { groupGrade, heightWords, rangeWords, grindLengthWords, toMark, volumeWords, windowInMarks } from './results-words';
 
 interface CourseCardProps {
   bundle: RoundBundle;
@@ -93,7 +93,7 @@ export function CourseCard({ bundle, wall, group }: CourseCardProps) {
         value={
           course.grindLength > 0
             ? t('course.grindLength', {
-                length: runLengthWords(course.grindLength, bundle),
+                length: grindLengthWords(course.grindLength, bundle),
                 volume: volumeWords(course.grindVolume, bundle),
               })
             : t('course.noGrinding')

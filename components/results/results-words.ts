@@ -66,20 +66,25 @@ export function wallWords(bundle: RoundBundle, state: RoundState, wall: NonNulla
   }
   const short = printSmall(toMark(Math.max(...wall.groups.map((one) => one.shortBy)), job.graduation), job.unitStyle);
   if (wall.answer === 'after-grinding') {
-    const metres = wall.groups.reduce(
+    const length = wall.groups.reduce(
       (sum, one) => sum + (one.options.find((option) => option.kind === 'least-material')?.grindLength ?? 0),
       0,
     );
-    return i18n.t('results:wall.grind', { ...limits, short, length: runLengthWords(metres, bundle) });
+    return i18n.t('results:wall.grind', { ...limits, short, length: grindLengthWords(length, bundle) });
   }
   return i18n.t('results:wall.no', { ...limits, short, grind: printSmall(bedRule.grindMost, bedRule.style) });
 }
 
-/** A length along the footing, to the foot or the tenth of a metre: grinding is not measured finer. */
-export function runLengthWords(length: Nm, bundle: RoundBundle): string {
+/** A length along the footing, to the foot or the tenth of a metre: grinding is not measured finer, and is never said too short. */
+export function grindLengthWords(length: Nm, bundle: RoundBundle): string {
+  return distanceWords(length, bundle, Math.ceil);
+}
+
+/** A distance across the footing, to the foot or the tenth of a metre. */
+export function distanceWords(length: Nm, bundle: RoundBundle, round: (count: number) => number = Math.round): string {
   const { unitStyle } = bundle.job;
   const step = unitStyle === 'metric' ? 100_000_000 : 304_800_000;
-  const rounded = Math.ceil(length / step) * step;
+  const rounded = round(length / step) * step;
   return unitStyle === 'metric' ? `${(rounded / 1_000_000_000).toFixed(1)} m` : printRound(rounded, unitStyle);
 }
 

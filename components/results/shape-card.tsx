@@ -9,7 +9,7 @@ import type { Shape } from '@/shared/round/round-results';
 import type { RoundState } from '@/shared/round/round-state';
 import { offGradeWords } from '../lengths/length-words';
 import { printSmall } from '../lengths/print-length';
-import { fallWords, runLengthWords, tiltWords, toMark } from './results-words';
+import { fallWords, distanceWords, tiltWords, toMark } from './results-words';
 
 interface ShapeCardProps {
   bundle: RoundBundle;
@@ -33,7 +33,7 @@ export function ShapeCard({ bundle, state, shape }: ShapeCardProps) {
           label={toward ? t('shape.falls', { toward }) : t('shape.level')}
           value={
             toward
-              ? t('shape.drop', { drop: printSmall(mark(shape.drop), unitStyle), over: runLengthWords(shape.over, bundle) })
+              ? t('shape.drop', { drop: printSmall(mark(shape.drop), unitStyle), over: distanceWords(shape.over, bundle) })
               : t('shape.none')
           }
         />
