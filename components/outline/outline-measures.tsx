@@ -9,7 +9,7 @@ import { ListRow } from '@/components/ui/list-row';
 import { Body, Figure, Label } from '@/components/ui/text';
 import { space } from '@/constants/theme';
 import { i18n } from '@/hooks/i18n/i18n';
-import { toTheMark, type JobUnits } from './job-units';
+import { toTheMark, type JobUnits } from '@/components/lengths/job-units';
 import type { OutlineEditor } from './use-outline-editor';
 
 /** An outline of many corners has more diagonals than anybody tapes: the longest show the most. */

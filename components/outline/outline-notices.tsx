@@ -3,7 +3,7 @@ import { printLength } from '@/components/lengths/print-length';
 import { Button } from '@/components/ui/button';
 import { Notice } from '@/components/ui/notice';
 import { i18n } from '@/hooks/i18n/i18n';
-import { toTheMark, type JobUnits } from './job-units';
+import { toTheMark, type JobUnits } from '@/components/lengths/job-units';
 import type { OutlineEditor } from './use-outline-editor';
 
 interface OutlineNoticesProps {

@@ -2,7 +2,7 @@ import { Card } from '@/components/ui/card';
 import { OutlineDrawing, type DrawnRun } from '@/components/charts/outline-drawing';
 import type { Nm, PlanPoint, TracedOutline } from '@/analysis';
 import type { Run } from '@/shared/api/footing-schemas';
-import { toTheMark, type JobUnits } from './job-units';
+import { toTheMark, type JobUnits } from '@/components/lengths/job-units';
 import type { OutlineState } from './read-outline';
 
 /** Where each run begins and ends on the plan. A closed outline that misses ends where the last run does, not at its start. */

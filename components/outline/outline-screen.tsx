@@ -16,7 +16,7 @@ import { useMay, useSession } from '@/hooks/session/use-session';
 import { useWide } from '@/hooks/use-wide';
 import type { Footing } from '@/shared/api/footing-schemas';
 import type { Job } from '@/shared/api/job-endpoints';
-import { unitsOf } from './job-units';
+import { unitsOf } from '@/components/lengths/job-units';
 import { OutlineMeasures } from './outline-measures';
 import { OutlineNotices } from './outline-notices';
 import { OutlinePicture } from './outline-picture';

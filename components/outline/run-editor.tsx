@@ -12,7 +12,7 @@ import { Heading } from '@/components/ui/text';
 import { TextField } from '@/components/ui/text-field';
 import { radius, space } from '@/constants/theme';
 import { useTokens } from '@/hooks/use-tokens';
-import type { JobUnits } from './job-units';
+import type { JobUnits } from '@/components/lengths/job-units';
 import type { DraftRun, OutlineAction } from './outline-draft';
 import { outlineRefusal } from './outline-refusal';
 import { fieldOf } from './read-outline';

@@ -5,7 +5,7 @@ import { Body, Figure, Heading, Label } from '@/components/ui/text';
 import { space, target } from '@/constants/theme';
 import { useTokens } from '@/hooks/use-tokens';
 import type { Footing } from '@/shared/api/footing-schemas';
-import { toTheMark, type JobUnits } from './job-units';
+import { toTheMark, type JobUnits } from '@/components/lengths/job-units';
 import type { DraftRun } from './outline-draft';
 import { RunEditor } from './run-editor';
 import { lengthWords, sizeWords, stepWords, turnWords } from './run-words';

@@ -1,7 +1,7 @@
 import { i18n } from '@/hooks/i18n/i18n';
 import type { Run } from '@/shared/api/footing-schemas';
 import type { DraftRun } from './outline-draft';
-import { toTheMark, type JobUnits } from './job-units';
+import { toTheMark, type JobUnits } from '@/components/lengths/job-units';
 import type { OutlineState } from './read-outline';
 
 /** "turn right", "turn left 45°", and at the last run "closes" or "ends". */

@@ -11,7 +11,7 @@ import { Card } from '@/components/ui/card';
 import { Choice } from '@/components/ui/choice';
 import { Body } from '@/components/ui/text';
 import { space } from '@/constants/theme';
-import type { JobUnits } from './job-units';
+import type { JobUnits } from '@/components/lengths/job-units';
 import { newRun, type DraftRun } from './outline-draft';
 import { outlineRefusal } from './outline-refusal';
 import { READY_SHAPES, SHAPE_FIELDS, shapeRuns, type ReadyShape, type ShapeField, type ShapeSizes } from './ready-shapes';

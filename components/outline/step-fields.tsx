@@ -9,7 +9,7 @@ import { space } from '@/constants/theme';
 import { useTokens } from '@/hooks/use-tokens';
 import type { DraftRun, DraftStep, OutlineAction } from './outline-draft';
 import { stepFieldOf } from './read-outline';
-import type { JobUnits } from './job-units';
+import type { JobUnits } from '@/components/lengths/job-units';
 
 interface StepFieldsProps {
   run: DraftRun;

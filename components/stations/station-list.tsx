@@ -1,0 +1,108 @@
+import { useState } from 'react';
+import { useTranslation } from 'react-i18next';
+import { StyleSheet, View } from 'react-native';
+import { describeError } from '@/components/forms/describe-error';
+import { toTheMark, type JobUnits } from '@/components/lengths/job-units';
+import { Button } from '@/components/ui/button';
+import { Card } from '@/components/ui/card';
+import { ListRow } from '@/components/ui/list-row';
+import { Notice } from '@/components/ui/notice';
+import { TextField } from '@/components/ui/text-field';
+import { space } from '@/constants/theme';
+import type { Footing, Station } from '@/shared/api/footing-schemas';
+import type { StationsEditor } from './use-stations-editor';
+
+interface StationListProps {
+  editor: StationsEditor;
+  footing: Footing;
+  units: JobUnits;
+  may: boolean;
+}
+
+/** The stations that stand, in walking order; a press opens one to name or remove it. */
+export function StationList({ editor, footing, units, may }: StationListProps) {
+  const { t } = useTranslation('stations');
+  const [open, setOpen] = useState<string | null>(null);
+  const stations = [...footing.stations].sort((p, q) => p.position - q.position);
+  return (
+    <Card title={t('list.title')} note={t('list.count', { count: stations.length })}>
+      <View role="list">
+        {stations.map((station, index) => {
+          const at = toTheMark(station.at, units);
+          const side = station.step === null ? [] : [t(station.step === 'before' ? 'list.before' : 'list.after')];
+          const corner = station.corner === null ? [] : [t('list.corner', { letter: station.corner })];
+          const grade = t('list.grade', { grade: toTheMark(station.planGrade, units) });
+          return (
+            <View key={station.id} role="listitem">
+              <ListRow
+                title={station.name}
+                note={[...corner, ...side, grade].join(', ')}
+                end={at}
+                label={[t('list.spoken', { name: station.name, at }), ...corner, ...side].join(', ')}
+                onPress={may ? () => setOpen(open === station.id ? null : station.id) : undefined}
+                last={index === stations.length - 1}
+              />
+              {open === station.id ? (
+                <StationEditor key={station.name} editor={editor} station={station} onClose={() => setOpen(null)} />
+              ) : null}
+            </View>
+          );
+        })}
+      </View>
+    </Card>
+  );
+}
+
+/** Name a station, or remove it while nothing is shot there. */
+function StationEditor({ editor, station, onClose }: { editor: StationsEditor; station: Station; onClose: () => void }) {
+  const { t } = useTranslation(['stations', 'errors']);
+  const { changing, removing } = editor;
+  const [name, setName] = useState(station.name);
+  const [empty, setEmpty] = useState(false);
+  const fixed = station.corner !== null || station.step !== null;
+  const save = () => {
+    if (name.trim() === '') return setEmpty(true);
+    if (name.trim() === station.name) return onClose();
+    changing.mutate({ stationId: station.id, change: { name: name.trim() } }, { onSuccess: onClose });
+  };
+  const error = [
+    changing.variables?.stationId === station.id ? changing.error : null,
+    removing.variables === station.id ? removing.error : null,
+  ].find((failed) => failed !== null);
+  return (
+    <View style={styles.editor}>
+      <TextField
+        label={t('edit.nameOf', { name: station.name })}
+        value={name}
+        onChangeText={(typed) => {
+          setName(typed);
+          setEmpty(false);
+        }}
+        onSubmitEditing={save}
+        error={empty ? t('errors:field.required') : undefined}
+        maxLength={120}
+        autoFocus
+      />
+      {error ? <Notice kind="refusal">{describeError(error)}</Notice> : null}
+      <View style={styles.buttons}>
+        <Button label={t('edit.save')} size="small" busy={changing.isPending} onPress={save} />
+        {fixed ? null : (
+          <Button
+            label={t('edit.remove', { name: station.name })}
+            size="small"
+            variant="plain"
+            busy={removing.isPending}
+            onPress={() => removing.mutate(station.id, { onSuccess: onClose })}
+          />
+        )}
+        <Button label={t('edit.done')} size="small" variant="quiet" onPress={onClose} />
+      </View>
+      {fixed ? <Notice kind="plain">{t('edit.fixed')}</Notice> : null}
+    </View>
+  );
+}
+
+const styles = StyleSheet.create({
+  editor: { gap: space.s, paddingVertical: space.m },
+  buttons: { flexDirection: 'row', flexWrap: 'wrap', gap: space.s },
+});
