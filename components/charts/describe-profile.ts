@@ -1,6 +1,7 @@
 import type { TFunction } from 'i18next';
 import { formatLength, type Nm } from '@/analysis';
 import type { ChartUnits, ProfilePoint } from './chart-types';
+import type { ProfileGeometry } from './profile-geometry';
 
 type Words = TFunction<'charts'>;
 
@@ -44,3 +45,12 @@ export function describeProfile(points: readonly ProfilePoint[], units: ChartUni
   );
   return sentences.join(' ');
 }
+
+/** How much larger heights are drawn than distances, and in what unit their axis counts: "heights in inches, ×800". */
+export function heightsNote({ exaggeration }: Pick<ProfileGeometry, 'exaggeration'>, { style }: ChartUnits, t: Words): string {
+  return t('heightsIn', { unit: t(`unit.${style}`), times: formatTimes(exaggeration, t('thousands')) });
+}
+
+/** Whole times with the language's thousands mark; a long footing drawn small may have fewer than ten. */
+const formatTimes = (times: number, mark: string) =>
+  times >= 10 ? String(Math.round(times)).replace(/\B(?=(\d{3})+$)/g, mark) : String(Number(times.toFixed(1)));

@@ -6,7 +6,7 @@ import { fonts } from '@/constants/fonts';
 import { typeSize } from '@/constants/theme';
 import { useTokens } from '@/hooks/use-tokens';
 import type { ChartTolerance, ChartUnits, ProfileCorner, ProfilePoint } from './chart-types';
-import { describeProfile, stationWords } from './describe-profile';
+import { describeProfile, heightsNote, stationWords } from './describe-profile';
 import { Marks, StringLine } from './marks';
 import { profileGeometry, type ProfileGeometry } from './profile-geometry';
 import { useMeasuredWidth } from './use-measured-width';
@@ -28,6 +28,7 @@ interface ProfileStripProps {
 /** The footing unrolled, in a strip: what has been shot hangs over or under the string line, the rest are ticks on it. */
 export function ProfileStrip({ height = 88, currentId, ...data }: ProfileStripProps) {
   const { t } = useTranslation('charts');
+  const tokens = useTokens();
   const [width, onLayout] = useMeasuredWidth();
   const geometry = profileGeometry({ ...data, width, height });
   const current = data.points.find(({ id }) => id === currentId);
@@ -39,6 +40,16 @@ export function ProfileStrip({ height = 88, currentId, ...data }: ProfileStripPr
     <View onLayout={onLayout} style={{ height }}>
       <Svg width={width} height={height} role="img" aria-label={spoken.filter((part) => part !== null).join(' ')}>
         <ProfileGround geometry={geometry} />
+        <SvgText
+          x={geometry.field.right}
+          y={geometry.field.top + 7}
+          textAnchor="end"
+          fontFamily={fonts.figureMedium}
+          fontSize={typeSize.tiny}
+          fill={tokens.ink2}
+        >
+          {heightsNote(geometry, data.units, t)}
+        </SvgText>
         <StringLine from={geometry.field.left} to={geometry.field.right} y={geometry.grade} />
         <ProfileTrace geometry={geometry} />
         <Marks marks={geometry.marks} />
@@ -48,8 +59,8 @@ export function ProfileStrip({ height = 88, currentId, ...data }: ProfileStripPr
   );
 }
 
-/** What lies under the shots: the band of tolerance, the corners, the heights. */
-export function ProfileGround({ geometry }: { geometry: ProfileGeometry }) {
+/** What lies under the shots: the band of tolerance, the corners, and unless the chart writes them itself the heights. */
+export function ProfileGround({ geometry, ticks = true }: { geometry: ProfileGeometry; ticks?: boolean }) {
   const tokens = useTokens();
   const { field, band } = geometry;
   const text = { fontFamily: fonts.figureMedium, fontSize: typeSize.tiny, fill: tokens.ink2 };
@@ -64,7 +75,7 @@ export function ProfileGround({ geometry }: { geometry: ProfileGeometry }) {
         fill={tokens.onTint}
       />
       <Path d={lines} stroke={tokens.rule} strokeWidth={1} fill="none" />
-      {geometry.ticks.map((tick) => (
+      {(ticks ? geometry.ticks : []).map((tick) => (
         <SvgText key={tick.height} x={field.left - 8} y={tick.y + 4.5} textAnchor="end" {...text}>
           {tick.label}
         </SvgText>
