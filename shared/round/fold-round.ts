@@ -1,4 +1,4 @@
-import { judge, judgeRound, reduceLevelNotes, type LevelReduction, type ReducedShot } from '@/analysis';
+import { judge, judgeRound, reduceLevelNotes, type JudgedStation, type LevelReduction, type ReducedShot } from '@/analysis';
 import type { ReadingRecord, SeriesRecord } from '../records';
 import { orderRecords, type OrderedRecord } from './order-records';
 import { recordsByKind, type Ordered, type RecordsByKind } from './records-by-kind';
@@ -35,11 +35,17 @@ export function foldRound(records: readonly FoldRecord[], context: RoundContext)
     close: deciding.filter((shot) => shot?.close).length,
     lap: newestLap(targets),
     wholeReadLap: isWholeReadLap(targets, (shot) => order.get(shot.id) ?? -1),
-    verdict: judgeRound(deciding),
+    verdict: judgeRound(deciding.map(judgedStation)),
     disagreements: phonesThatDisagree(targets),
     waitingStrikes: kinds.waitingStrikes,
     clocksOff: clocksOff(ordered),
   };
+}
+
+/** A shot without an elevation (its backsight was struck out, or has not come yet) says nothing: the round cannot tell. */
+function judgedStation(shot: RoundShot | null): JudgedStation | null {
+  if (shot === null) return null;
+  return shot.verdict === null ? { laser: 'unchecked', verdict: 'cannot-tell' } : { laser: shot.laser, verdict: shot.verdict };
 }
 
 function foldTargets(kinds: RecordsByKind, reduction: LevelReduction, context: RoundContext): RoundTarget[] {

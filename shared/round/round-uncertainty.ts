@@ -37,9 +37,11 @@ export function roundShotUncertainty(
   const rod = context.rods.find((candidate) => candidate.id === series.rodId);
   if (!laser || !rod) return null;
   const band = { fine: laser.receiverFine, coarse: laser.receiverCoarse };
+  // A set shot that does not say how its receiver stood is taken at the wider band.
+  const receiver = record.receiver ?? (record.how === 'set' ? 'coarse' : null);
   const { absolute, relative } = shotUncertainty({
     graduation: readingGraduation(context.job, rod),
-    receiverBand: record.receiver ? band[record.receiver] : undefined,
+    receiverBand: receiver ? band[receiver] : undefined,
     set: record.how === 'set',
     laserAccuracy: laser.accuracy,
     laserAccuracyAt: laser.accuracyAt,
