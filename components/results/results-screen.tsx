@@ -7,9 +7,6 @@ import { ErrorState } from '@/components/ui/error-state';
 import { LoadingState } from '@/components/ui/loading-state';
 import { Notice } from '@/components/ui/notice';
 import { Screen } from '@/components/ui/screen';
-import { StatusPill } from '@/components/ui/status-pill';
-import { savedState } from '@/hooks/outbox/saved-state';
-import { useOutbox } from '@/hooks/outbox/use-outbox';
 import { useRound } from '@/hooks/round/use-round';
 import { useMay } from '@/hooks/session/use-session';
 import { useWide } from '@/hooks/use-wide';
@@ -21,6 +18,7 @@ import { PlanView } from '../charts/plan-view';
 import { ProfileChart } from '../charts/profile-chart';
 import { describeError } from '../forms/describe-error';
 import { printSmall } from '../lengths/print-length';
+import { SavedPill } from '../root/saved-pill';
 import { AnswersCard } from './answers-card';
 import { planCorners, planStations, profileCorners, profilePoints, railsOf } from './chart-data';
 import { CourseCard } from './course-card';
@@ -60,7 +58,6 @@ interface ResultsProps {
 
 function Results({ bundle, state }: ResultsProps) {
   const { t } = useTranslation('results');
-  const saved = savedState(useOutbox());
   const anySurface = useMay('round.any-surface');
   const topOnly = useMay('round.shoot');
   const { round, footing, job } = bundle;
@@ -76,7 +73,7 @@ function Results({ bundle, state }: ResultsProps) {
         { label: job.name, href: { pathname: '/jobs/[jobId]', params: { jobId: job.id } } },
         { label: footing.name, href: home },
       ]}
-      pill={<StatusPill {...saved} />}
+      pill={<SavedPill />}
       actions={
         mayShoot ? (
           <>
@@ -168,12 +165,13 @@ function Profiles({ bundle, state, results, length }: PictureProps & { length: n
   const { job, toleranceRule } = bundle;
   const rails = railsOf(bundle);
   return rails.map((rail) => (
-    <Card
-      key={rail}
-      title={t('profile.title')}
-      note={rails.length > 1 ? t('profile.rail', { rail: t(`rail.${rail === 'inner' ? 'inner' : 'outer'}`) }) : undefined}
-    >
+    <Card key={rail}>
       <ProfileChart
+        title={
+          rails.length > 1
+            ? t('profile.titleRail', { rail: t(`rail.${rail === 'inner' ? 'inner' : 'outer'}`) })
+            : t('profile.title')
+        }
         points={profilePoints(bundle, state, results, rail)}
         corners={profileCorners(bundle)}
         length={length}

@@ -87,7 +87,14 @@ describe('what a shot comes to', () => {
   it('takes the farthest target from the middle for its distance when nobody tapped where the laser stands', () => {
     const made = new Phone(PHONE_A, SERIES_A);
     made.write({ kind: 'setup', id: idOf(0x5a, 1), laserId: idOf(0x1a, 1), stand: null });
-    made.write({ kind: 'series', id: SERIES_A, setupId: idOf(0x5a, 1), rodId: idOf(0x2d, 1), checkLimit: 0, benchmarkDistance: 0 });
+    made.write({
+      kind: 'series',
+      id: SERIES_A,
+      setupId: idOf(0x5a, 1),
+      rodId: idOf(0x2d, 1),
+      checkLimit: 0,
+      benchmarkDistance: 0,
+    });
     made.backsight(4 * FOOT);
     made.shoot(1, 4 * FOOT);
     // Stations at 0, 8, 16 ft: the ends are 8 ft from the middle.
