@@ -6,7 +6,11 @@ import { execFileSync } from 'node:child_process';
  */
 export function runR(script: string): (number | null)[][] {
   const prelude = `emit <- function(v) cat(paste(ifelse(is.na(v), "NA", sprintf("%.17g", v)), collapse=" "), "\\n")\n`;
-  const text = execFileSync('Rscript', ['--vanilla', '-e', prelude + script], { encoding: 'utf8', maxBuffer: 1 << 28 });
+  const text = execFileSync('Rscript', ['--vanilla', '-'], {
+    input: `${prelude}${script}\n`,
+    encoding: 'utf8',
+    maxBuffer: 1 << 28,
+  });
   const lines = text.split('\n').filter((line) => line.trim() !== '');
   return lines.map((line) =>
     line
