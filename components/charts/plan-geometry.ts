@@ -157,9 +157,22 @@ interface TextWish {
   middle: Spot;
 }
 
+/** A part of the picture, in px, that words keep clear of. */
+export interface TextBox {
+  left: number;
+  right: number;
+  top: number;
+  bottom: number;
+}
+
 /** Of texts in order of importance, those that fit the picture beside one another, moved in from its edges where they stick out. */
-export function placeTexts(wishes: readonly TextWish[], size: { width: number; height: number }, fontSize: number): PlacedText[] {
-  const taken: { left: number; right: number; top: number; bottom: number }[] = [];
+export function placeTexts(
+  wishes: readonly TextWish[],
+  size: { width: number; height: number },
+  fontSize: number,
+  obstacles: readonly TextBox[] = [],
+): PlacedText[] {
+  const taken = [...obstacles];
   return wishes.flatMap(({ key, text, middle }) => {
     const half = textWidth(text, fontSize) / 2 + 2;
     const x = Math.min(Math.max(middle.x, half), size.width - half);

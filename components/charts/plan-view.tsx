@@ -20,6 +20,7 @@ import {
   type PlacedText,
   type PlanFit,
   type Spot,
+  type TextBox,
 } from './plan-geometry';
 import { PlacePicker, StationPicker } from './plan-pickers';
 import { useMeasuredWidth } from './use-measured-width';
@@ -103,6 +104,7 @@ function PlanGround({
   corners,
   closed,
   width,
+  laser,
   fit,
   size,
 }: PlanViewProps & { fit: PlanFit; size: { width: number; height: number } }) {
@@ -120,6 +122,7 @@ function PlanGround({
     }),
     size,
     typeSize.small,
+    laser ? [laserBox(fit.toSpot(laser), size.width)] : [],
   );
   return (
     <G>
@@ -190,6 +193,12 @@ function Tilt({
       ) : null}
     </G>
   );
+}
+
+/** What the laser's mark and word take up. */
+function laserBox({ x, y }: Spot, width: number): TextBox {
+  const left = x > width - 70;
+  return { left: x - (left ? 60 : 15), right: x + (left ? 15 : 60), top: y - 15, bottom: y + 15 };
 }
 
 function LaserMark({ spot, label, width }: { spot: Spot; label: string; width: number }) {

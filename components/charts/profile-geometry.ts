@@ -29,8 +29,8 @@ export interface ProfileInput {
 
 export interface ProfileMark extends PlacedMark {
   id: string;
-  /** Drawn at the edge because the reading lies beyond the picture: which way. */
-  beyond: 'above' | 'below' | null;
+  /** Its height in words, "−1′ 0″", where it lies beyond the picture and is drawn at the edge. */
+  beyond: string | null;
 }
 
 export interface ProfileGeometry {
@@ -52,6 +52,8 @@ export interface ProfileGeometry {
   y: (height: Nm) => number;
 }
 
+/** Room over the highest and under the lowest height for the marks that are drawn there, in px. */
+const markRoom = 8;
 /** Heights beyond this many tolerances are drawn at the edge: a misread foot must not flatten everything else. */
 const mostTolerances = 8;
 const roundSteps = [1, 1.2, 1.5, 2, 2.5, 3, 4, 5, 6, 8];
@@ -67,7 +69,7 @@ export function roundDown(value: number): number {
 export function heightRange(points: readonly ProfilePoint[], tolerance: ChartTolerance): { low: Nm; high: Nm } {
   const unit = Math.max(tolerance.low, tolerance.high, 1);
   const seen = points.flatMap(({ deviation }) => (deviation === null ? [] : [deviation]));
-  const reach = (far: number, own: Nm) => Math.max(own * 2.2, Math.min(far * 1.2, unit * mostTolerances), unit * 0.9);
+  const reach = (far: number, own: Nm) => Math.max(own * 2.1, Math.min(far, unit * mostTolerances), unit * 0.7);
   return {
     low: -reach(Math.max(0, ...seen.map((value) => -value)), tolerance.low),
     high: reach(Math.max(0, ...seen), tolerance.high),
@@ -118,6 +120,28 @@ function tracePath(points: readonly ProfilePoint[], marks: readonly ProfileMark[
   return path;
 }
 
+/** Radius of a mark's dot, in px: 5 where stations stand apart, smaller where they would hide one another. */
+export function markRadius({ marks, field }: Pick<ProfileGeometry, 'marks' | 'field'>): number {
+  return Math.min(Math.max(((field.right - field.left) / Math.max(marks.length, 1)) * 0.55, 2.2), 5);
+}
+
+/** Where in the field a note of this width hides no mark: a corner if one is free, else the corner with the fewest. */
+export function freeCorner({ marks, field }: Pick<ProfileGeometry, 'marks' | 'field'>, width: number, height: number) {
+  const corners = [
+    { x: field.right, y: field.top, anchor: 'end' as const },
+    { x: field.right, y: field.bottom - height, anchor: 'end' as const },
+    { x: field.left + 12, y: field.top, anchor: 'start' as const },
+    { x: field.left + 12, y: field.bottom - height, anchor: 'start' as const },
+  ];
+  const hidden = corners.map(({ x, y, anchor }) => {
+    const left = anchor === 'end' ? x - width : x;
+    return marks.filter((mark) => mark.x > left - 8 && mark.x < left + width + 8 && mark.y > y - 8 && mark.y < y + height + 8)
+      .length;
+  });
+  const best = hidden.indexOf(Math.min(...hidden));
+  return corners[best] ?? { x: field.right, y: field.top, anchor: 'end' as const };
+}
+
 /**
  * The footing unrolled: walking round it is left to right, heights are drawn larger by a round number that the picture says.
  * Pure; the phone's strip, the results' chart and the page on paper are all drawn from it. Points come in walking order.
@@ -135,20 +159,22 @@ export function profileGeometry(input: ProfileInput): ProfileGeometry {
     bottom: Math.max(height - fontSize - 9, 7),
   };
   const perNmAlong = (field.right - field.left) / (view.to - view.from);
-  const room = (field.bottom - field.top) / (range.high - range.low);
+  const fieldHeight = Math.max(field.bottom - field.top - 2 * markRoom, 1);
+  const room = fieldHeight / (range.high - range.low);
   const exaggeration = roundDown(room / perNmAlong);
   const perNm = exaggeration * perNmAlong;
-  const spare = field.bottom - field.top - perNm * (range.high - range.low);
-  const grade = field.top + spare / 2 + perNm * range.high;
+  const spare = fieldHeight - perNm * (range.high - range.low);
+  const grade = field.top + markRoom + spare / 2 + perNm * range.high;
   const x = (at: Nm) => field.left + (at - view.from) * perNmAlong;
   const y = (value: Nm) => grade - value * perNm;
-  const shown = { low: (grade - field.bottom) / perNm, high: (grade - field.top) / perNm };
+  const shown = { low: (grade - field.bottom + markRoom) / perNm, high: (grade - field.top - markRoom) / perNm };
   const marks = points.map((point): ProfileMark => {
     const value = point.deviation ?? 0;
-    const beyond = value > shown.high ? 'above' : value < shown.low ? 'below' : null;
+    const beyond = value > shown.high || value < shown.low;
     const at = y(Math.min(Math.max(value, shown.low), shown.high));
     const { id, mark, close, suspect } = point;
-    return { id, mark: point.deviation === null ? 'not-shot' : mark, close, suspect, beyond, x: x(point.at), y: at };
+    const said = beyond ? axisHeight(value, units.style) : null;
+    return { id, mark: point.deviation === null ? 'not-shot' : mark, close, suspect, beyond: said, x: x(point.at), y: at };
   });
   const inView = input.corners.filter(({ at }) => at >= view.from && at <= view.to).map(({ at, label }) => ({ x: x(at), label }));
   return {

@@ -5,10 +5,11 @@ import type { Nm } from '@/analysis';
 import { fonts } from '@/constants/fonts';
 import { typeSize } from '@/constants/theme';
 import { useTokens } from '@/hooks/use-tokens';
+import { textWidth } from './axis-text';
 import type { ChartTolerance, ChartUnits, ProfileCorner, ProfilePoint } from './chart-types';
 import { describeProfile, heightsNote, stationWords } from './describe-profile';
 import { Marks, StringLine } from './marks';
-import { profileGeometry, type ProfileGeometry } from './profile-geometry';
+import { freeCorner, markRadius, profileGeometry, type ProfileGeometry } from './profile-geometry';
 import { useMeasuredWidth } from './use-measured-width';
 
 interface ProfileStripProps {
@@ -28,7 +29,6 @@ interface ProfileStripProps {
 /** The footing unrolled, in a strip: what has been shot hangs over or under the string line, the rest are ticks on it. */
 export function ProfileStrip({ height = 88, currentId, ...data }: ProfileStripProps) {
   const { t } = useTranslation('charts');
-  const tokens = useTokens();
   const [width, onLayout] = useMeasuredWidth();
   const geometry = profileGeometry({ ...data, width, height });
   const current = data.points.find(({ id }) => id === currentId);
@@ -40,22 +40,52 @@ export function ProfileStrip({ height = 88, currentId, ...data }: ProfileStripPr
     <View onLayout={onLayout} style={{ height }}>
       <Svg width={width} height={height} role="img" aria-label={spoken.filter((part) => part !== null).join(' ')}>
         <ProfileGround geometry={geometry} />
-        <SvgText
-          x={geometry.field.right}
-          y={geometry.field.top + 7}
-          textAnchor="end"
-          fontFamily={fonts.figureMedium}
-          fontSize={typeSize.tiny}
-          fill={tokens.ink2}
-        >
-          {heightsNote(geometry, data.units, t)}
-        </SvgText>
+        <Note geometry={geometry} text={heightsNote(geometry, data.units, t)} />
         <StringLine from={geometry.field.left} to={geometry.field.right} y={geometry.grade} />
         <ProfileTrace geometry={geometry} />
-        <Marks marks={geometry.marks} />
+        <Marks marks={geometry.marks} r={markRadius(geometry)} />
+        <BeyondHeights geometry={geometry} />
         {current ? <CurrentStation x={geometry.x(current.at)} height={geometry.field.bottom} /> : null}
       </Svg>
     </View>
+  );
+}
+
+/** The exaggeration, in whichever corner hides no shot. */
+function Note({ geometry, text }: { geometry: ProfileGeometry; text: string }) {
+  const tokens = useTokens();
+  const size = typeSize.tiny;
+  const { x, y, anchor } = freeCorner(geometry, textWidth(text, size), size);
+  return (
+    <SvgText x={x} y={y + size - 3} textAnchor={anchor} fontFamily={fonts.figureMedium} fontSize={size} fill={tokens.ink2}>
+      {text}
+    </SvgText>
+  );
+}
+
+/** Beside marks that lie beyond the picture, how far: "−1′ 0″". */
+export function BeyondHeights({ geometry }: { geometry: ProfileGeometry }) {
+  const tokens = useTokens();
+  return (
+    <G>
+      {geometry.marks.map(({ id, x, y, beyond }) => {
+        if (beyond === null) return null;
+        const left = x > geometry.field.right - 70;
+        return (
+          <SvgText
+            key={id}
+            x={x + (left ? -12 : 12)}
+            y={y + 4.5}
+            textAnchor={left ? 'end' : 'start'}
+            fontFamily={fonts.figure}
+            fontSize={typeSize.tiny}
+            fill={tokens.ink}
+          >
+            {beyond}
+          </SvgText>
+        );
+      })}
+    </G>
   );
 }
 

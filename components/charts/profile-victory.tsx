@@ -16,8 +16,8 @@ import type { ChartTolerance, ChartUnits, ProfileCorner, ProfilePoint } from './
 import { describeProfile, heightsNote, stationWords } from './describe-profile';
 import { Legend } from './legend';
 import { Marks, StringLine } from './marks';
-import { profileGeometry, type ProfileGeometry, type ProfileMark } from './profile-geometry';
-import { CurrentStation, ProfileGround } from './profile-strip';
+import { markRadius, profileGeometry, type ProfileGeometry, type ProfileMark } from './profile-geometry';
+import { BeyondHeights, CurrentStation, ProfileGround } from './profile-strip';
 import { followView, zoomView, type ProfileView } from './profile-view';
 import { ProfileWalker } from './profile-walker';
 import { useMeasuredWidth } from './use-measured-width';
@@ -68,6 +68,7 @@ export default function ProfileVictory({ title, height = 200, onStation, ...data
             <ProfileGround geometry={geometry} ticks={false} />
             <StringLine from={geometry.field.left} to={geometry.field.right} y={geometry.grade} />
             <ChartBody geometry={geometry} points={data.points} size={{ width, height }} />
+            <BeyondHeights geometry={geometry} />
             {here ? <CurrentStation x={geometry.x(here.at)} height={geometry.field.bottom} /> : null}
           </Svg>
         </View>
@@ -118,14 +119,17 @@ function ChartBody({ geometry, points, size }: ChartBodyProps) {
         style={hidden}
       />
       <VictoryLine data={inView} style={{ data: { stroke: tokens.ink, strokeWidth: 1.4 } }} />
-      <VictoryScatter data={inView.map((item) => ({ ...item, y: item.y ?? 0 }))} dataComponent={<StationMark />} />
+      <VictoryScatter
+        data={inView.map((item) => ({ ...item, y: item.y ?? 0 }))}
+        dataComponent={<StationMark r={markRadius({ marks: inView.map(({ mark }) => mark), field })} />}
+      />
     </VictoryChart>
   );
 }
 
 /** What the scatter plot draws at each place: the marks that every other picture of the product uses. */
-function StationMark({ x, y, datum }: { x?: number; y?: number; datum?: { mark: ProfileMark } }) {
-  return x === undefined || y === undefined || !datum ? null : <Marks marks={[{ ...datum.mark, x, y }]} />;
+function StationMark({ r, x, y, datum }: { r: number; x?: number; y?: number; datum?: { mark: ProfileMark } }) {
+  return x === undefined || y === undefined || !datum ? null : <Marks marks={[{ ...datum.mark, x, y }]} r={r} />;
 }
 
 function ZoomKey({ name, label, onPress, off }: { name: 'plus' | 'minus'; label: string; onPress: () => void; off: boolean }) {

@@ -1,5 +1,5 @@
 import { useTranslation } from 'react-i18next';
-import { StyleSheet, View } from 'react-native';
+import { StyleSheet, useWindowDimensions, View } from 'react-native';
 import { space } from '@/constants/theme';
 import { useTokens } from '@/hooks/use-tokens';
 import { Icon } from '@/components/ui/icons';
@@ -19,8 +19,10 @@ interface StagesLineProps {
 export function StagesLine({ done, current }: StagesLineProps) {
   const tokens = useTokens();
   const { t } = useTranslation('common');
+  // Six names fill a phone's width; on a narrower one they go on to a second line, which reads better from the left.
+  const apart = useWindowDimensions().width >= 380;
   return (
-    <View role="list" aria-label={t('stage.list')} style={styles.line}>
+    <View role="list" aria-label={t('stage.list')} style={[styles.line, apart ? styles.apart : null]}>
       {stageNames.map((name) => {
         const state = name === current ? 'current' : done.includes(name) ? 'done' : 'ahead';
         return (
@@ -42,6 +44,7 @@ export function StagesLine({ done, current }: StagesLineProps) {
 }
 
 const styles = StyleSheet.create({
-  line: { flexDirection: 'row', flexWrap: 'wrap', justifyContent: 'space-between', columnGap: space.s, rowGap: space.xs },
+  line: { flexDirection: 'row', flexWrap: 'wrap', columnGap: space.m, rowGap: space.xs, maxWidth: 440 },
+  apart: { justifyContent: 'space-between', columnGap: space.s },
   stage: { flexDirection: 'row', alignItems: 'center', gap: 3, borderBottomWidth: 3, paddingBottom: 2 },
 });

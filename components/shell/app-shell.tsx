@@ -67,9 +67,13 @@ function Rail({ here, signedInAs, company }: { here: PlaceKey | null; signedInAs
   const tokens = useTokens();
   const { t } = useTranslation('common');
   return (
-    <View style={[styles.rail, { backgroundColor: tokens.paper, borderRightColor: tokens.rule }]}>
+    <View
+      role="navigation"
+      aria-label={t('nav.main')}
+      style={[styles.rail, { backgroundColor: tokens.paper, borderRightColor: tokens.rule }]}
+    >
       <Brand small />
-      <View role="navigation" aria-label={t('nav.main')} style={styles.links}>
+      <View style={styles.links}>
         {places.map(({ key, href }) => (
           <Link key={key} href={href} asChild>
             <Pressable

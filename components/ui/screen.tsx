@@ -136,7 +136,7 @@ const styles = StyleSheet.create({
   body: { width: '100%', alignSelf: 'center', paddingHorizontal: space.l - 2, paddingBottom: space.l, gap: space.m },
   wideBody: { width: '100%', alignSelf: 'center', paddingHorizontal: space.xl, paddingBottom: space.xl, gap: space.l },
   header: { flexDirection: 'row', alignItems: 'center', flexWrap: 'wrap', gap: space.s, paddingTop: space.m, minHeight: 56 },
-  titles: { flexGrow: 1, flexShrink: 1, flexBasis: 150, minWidth: 0 },
+  titles: { flexGrow: 1, flexShrink: 1, flexBasis: 120, minWidth: 0 },
   back: {
     width: target.least,
     height: target.least,
