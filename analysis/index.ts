@@ -1,6 +1,9 @@
 /** The maths of the product: pure functions on whole nanometres. docs/maths.md explains each result. */
 export * from './analysis-error';
+export * from './concrete';
+export * from './course';
 export * from './flatness';
+export * from './laser-check';
 export * from './lengths';
 export * from './level-notes';
 export * from './misclosure';
@@ -14,3 +17,4 @@ export { fUpperTail, studentTwoSided, studentUpperQuantile } from './distributio
 export { fitPlane } from './plane-fit';
 export { tiltAgainstLaser } from './tilt-against-laser';
 export { shotUncertainty } from './uncertainty';
+export { screenShots } from './screening';

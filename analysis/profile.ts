@@ -36,7 +36,7 @@ export function segmentsOf(profile: readonly ProfilePoint[]): Segment[] {
 
 /**
  * ∫ max(h, 0) over a straight piece that runs from height `h0` to `h1`, and the length over which h is above 0: exact, cut at the zero
- * crossing.
+ * crossing. A piece that lies at 0 is not above it.
  */
 export function positivePart(h0: number, h1: number, length: Nm): { area: number; length: Nm } {
   if (h0 <= 0 && h1 <= 0) return { area: 0, length: 0 };
