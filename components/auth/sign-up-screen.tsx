@@ -7,6 +7,7 @@ import { FormTextField } from '@/components/forms/form-text-field';
 import { placeRefusals } from '@/components/forms/place-refusals';
 import { Button } from '@/components/ui/button';
 import { Body } from '@/components/ui/text';
+import { ApiError } from '@/hooks/api/client';
 import { signUp, type SignUpForm } from '@/hooks/session/session-actions';
 import { emailSchema, passwordSchema } from '@/shared/api/session-endpoints';
 import { AuthFrame } from './auth-frame';
@@ -23,7 +24,9 @@ export function SignUpScreen() {
     try {
       await signUp({ company: form.company.trim(), name: form.name.trim(), email: form.email.trim(), password });
     } catch (error) {
-      setRefusal(placeRefusals(error, setError, names));
+      // A refusal of this kind can have no other cause here, so a vague sentence would hide nothing and help nobody.
+      const known = error instanceof ApiError && error.code === 'sign-in-refused';
+      setRefusal(known ? t('auth:signUp.known') : placeRefusals(error, setError, names));
     }
   });
   const checkEmail = (text: string) => (emailSchema.safeParse(text.trim()).success ? null : t('errors:field.email'));

@@ -1,6 +1,6 @@
 import { useRouter } from 'expo-router';
 import { useState } from 'react';
-import { FormProvider, useForm } from 'react-hook-form';
+import { FormProvider, useForm, useWatch } from 'react-hook-form';
 import { useTranslation } from 'react-i18next';
 import { FormBox } from '@/components/forms/form-box';
 import { FormChoice } from '@/components/forms/form-choice';
@@ -98,7 +98,7 @@ function NewJob() {
   const { control, formState } = form;
   // Reading it subscribes: `fillIn` asks it what was changed by hand.
   void formState.dirtyFields;
-  const [style, wall] = form.watch(['unitStyle', 'wallType']);
+  const [style, wall] = useWatch({ control, name: ['unitStyle', 'wallType'] });
   return (
     <Screen
       title={t('new.title')}

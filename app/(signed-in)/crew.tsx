@@ -1,0 +1,5 @@
+import { CrewScreen } from '@/components/crew/crew-screen';
+
+export default function CrewRoute() {
+  return <CrewScreen />;
+}

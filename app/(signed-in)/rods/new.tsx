@@ -1,0 +1,5 @@
+import { NewRodScreen } from '@/components/lasers/new-rod-screen';
+
+export default function NewRodRoute() {
+  return <NewRodScreen />;
+}
