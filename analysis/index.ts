@@ -18,3 +18,7 @@ export { fitPlane } from './plane-fit';
 export { tiltAgainstLaser } from './tilt-against-laser';
 export { shotUncertainty } from './uncertainty';
 export { screenShots } from './screening';
+export { huberRegression, type HuberFit, type HuberOptions } from './huber-regression';
+export { leastSquares, type LeastSquaresFit, type LeastSquaresOptions } from './least-squares';
+export { fitPlaneHuber } from './plane-fit-huber';
+export { fitPlaneMinimumZone } from './plane-fit-minimum-zone';

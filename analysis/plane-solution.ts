@@ -22,8 +22,11 @@ export interface PlaneSolution {
   /** Rise of z to the east and to the north. */
   gradientX: number;
   gradientY: number;
-  /** Which coordinate p is; for 'line' p runs along the line, whatever this says. */
+  /** Which coordinate p is, where the model is 'plane'. */
   pivot: 'x' | 'y';
+  /** Unit vector of p in the plan: east or north by the pivot, along the points for 'line'. */
+  directionX: number;
+  directionY: number;
   /** First coordinate of each point, about the weighted mean; zero for 'level'. */
   p: Float64Array;
   alongP: number;
@@ -84,4 +87,21 @@ export function measureExtent(points: readonly PlanePoint[]): Extent {
     if (sizeZ > maxZ) maxZ = sizeZ;
   }
   return { maxX, maxY, maxZ };
+}
+
+/** Rise to the east and to the north of what rises by so much along p and along q. */
+export function gradientOf(s: PlaneSolution, alongP: number, alongQ: number): { x: number; y: number } {
+  const first = alongP - s.shear * alongQ;
+  const across = s.pivot === 'x' ? { x: 0, y: alongQ } : { x: alongQ, y: 0 };
+  return { x: first * s.directionX + across.x, y: first * s.directionY + across.y };
+}
+
+/** The plane z = a + b·x + c·y that a solution becomes when a constant and rises along p and q are added to it. */
+export function corrected(
+  s: PlaneSolution,
+  [constant = 0, alongP = 0, alongQ = 0]: readonly number[],
+): { a: number; b: number; c: number } {
+  const turn = gradientOf(s, alongP, alongQ);
+  const base = s.model === 'plane' ? s.atOrigin : s.meanZ - s.gradientX * s.meanX - s.gradientY * s.meanY;
+  return { a: base + constant - turn.x * s.meanX - turn.y * s.meanY, b: s.gradientX + turn.x, c: s.gradientY + turn.y };
 }

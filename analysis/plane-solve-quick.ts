@@ -178,6 +178,8 @@ export function solveQuickly(points: readonly PlanePoint[], extent: Extent): Pla
     gradientX,
     gradientY,
     pivot: byX ? 'x' : 'y',
+    directionX: byX ? 1 : 0,
+    directionY: byX ? 0 : 1,
     p,
     alongP,
     sumPP,
