@@ -61,6 +61,7 @@ export function huberRegression(
   const start = leastSquares(columns, values, { intercept: true, weights: precision });
   let { coefficients, residuals } = start;
   const largest = values.reduce((most, value) => Math.max(most, Math.abs(value)), 0);
+  const most = mostSteps(values.length);
   for (let iterations = 1; iterations <= most; iterations += 1) {
     const sizes = residuals.map((residual, i) => Math.abs(residual) * Math.sqrt(precision[i] ?? 1));
     const scale = medianOfSizes(sizes) / MAD;
