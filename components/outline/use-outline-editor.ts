@@ -3,7 +3,7 @@ import { v7 as newId } from 'uuid';
 import { readLength } from '@/components/lengths/read-length';
 import { printLength } from '@/components/lengths/print-length';
 import { isOutOfDate, useSetOutline } from '@/hooks/api/footing-queries';
-import { forgetDraft, keepDraft, keptDraft } from '@/hooks/drafts/kept-draft';
+import { canKeepDrafts, forgetDraft, keepDraft, keptDraft } from '@/hooks/drafts/kept-draft';
 import type { Footing } from '@/shared/api/footing-schemas';
 import type { Job } from '@/shared/api/job-endpoints';
 import { draftRun, emptyDraft, keptOutlineSchema, outlineReducer, type OutlineDraft } from './outline-draft';
@@ -25,14 +25,14 @@ function firstDraft(footing: Footing, job: Job, name: string): OutlineDraft {
 export function useOutlineEditor(footing: Footing, job: Job, personId: string) {
   const name = `outline:${personId}:${footing.id}`;
   const [draft, dispatch] = useReducer(outlineReducer, null, () => firstDraft(footing, job, name));
-  const [kept, setKept] = useState(true);
+  const [kept] = useState(canKeepDrafts);
   const saving = useSetOutline(footing.id);
   const read = readOutline(draft.runs, (text) => readLength(text, { style: job.unitStyle, sign: 'any', bareDecimal: 'feet' }));
   const state = outlineState(read.drawn, job.graduation);
   const theirs = footing.outlineVersion > draft.version;
 
   useEffect(() => {
-    if (draft.dirty) setKept(keepDraft(name, { version: draft.version, runs: draft.runs }));
+    if (draft.dirty) keepDraft(name, { version: draft.version, runs: draft.runs });
   }, [draft.dirty, draft.runs, draft.version, name]);
   // Somebody else saved, and nothing is being typed here: show theirs.
   useEffect(() => {

@@ -15,11 +15,22 @@ function store(): Storage | null {
   }
 }
 
-/** Whether it is now kept; false where the browser has no room for it. */
-export function keepDraft(name: string, draft: unknown): boolean {
+/** Keeps it in this browser; where that has no room, what is typed lives as long as the page. */
+export function keepDraft(name: string, draft: unknown): void {
   try {
-    const here = store();
-    here?.setItem(keyOf(name), JSON.stringify(draft));
+    store()?.setItem(keyOf(name), JSON.stringify(draft));
+  } catch (error) {
+    // Full, or forbidden: `canKeepDrafts` has told the screen, and the form itself still holds what was typed.
+    if (!(error instanceof DOMException)) throw error;
+  }
+}
+
+/** Whether a reload would find what is typed: false where the browser gives no store or has no room left in it. */
+export function canKeepDrafts(): boolean {
+  const here = store();
+  try {
+    here?.setItem(keyOf('probe'), 'x');
+    here?.removeItem(keyOf('probe'));
     return here !== null;
   } catch {
     return false;
