@@ -15,6 +15,7 @@ import type { Footing } from '@/shared/api/footing-schemas';
 import type { Role } from '@/shared/roles';
 import { FootingDetailsCard } from './footing-details-card';
 import { FootingPlanCard } from './footing-plan-card';
+import { roundInHand } from './round-in-hand';
 import { nextStep, openSurfaces, type NextStep } from './next-step';
 import { NextStepCard } from './next-step-card';
 import { OpenRoundCard } from './open-round-card';
@@ -103,13 +104,7 @@ function NextButton({ step, footingId, rounds }: { step: NextStep; footingId: st
         />
       );
     case 'go-on':
-      return (
-        <Button
-          {...look}
-          label={t('button.goOn')}
-          href={{ pathname: '/rounds/[roundId]/shoot', params: { roundId: step.round.id } }}
-        />
-      );
+      return <Button {...look} label={t('button.goOn')} href={roundInHand(step.round)} />;
     case 'see-results':
       return (
         <Button

@@ -24,10 +24,10 @@ export function newestFirst(rounds: readonly RoundSummary[]): RoundSummary[] {
   return [...rounds].sort((p, q) => Date.parse(q.openedAt) - Date.parse(p.openedAt));
 }
 
-/** The surface that a stage waits for a round of. */
-function surfaceOf(now: Footing['stages']['now']): Surface | null {
-  if (now === 'dig' || now === 'rails' || now === 'top') return now;
-  return null;
+/** The surface that a stage waits for a round of. After the rails the pour is released, and the top is what is shot next. */
+function surfaceOf({ now, done }: Footing['stages']): Surface | null {
+  if (now === 'dig' || now === 'rails') return now;
+  return (now === 'release' || now === 'top') && !done.includes('top') ? 'top' : null;
 }
 
 /** The one step that a footing's home offers first. */
@@ -39,7 +39,7 @@ export function nextStep(footing: Footing, roles: readonly Role[]): NextStep {
   const mine = openSurfaces(footing, roles);
   const open = rounds.find((round) => round.closedAt === null && round.verdict !== 'to-grade' && mine.includes(round.surface));
   if (open) return { do: 'go-on', round: open };
-  const surface = surfaceOf(footing.stages.now);
+  const surface = surfaceOf(footing.stages);
   const newest = rounds[0];
   if (
     surface !== null &&

@@ -1,5 +1,6 @@
 import type { Href } from 'expo-router';
 import type { Waiting } from '@/shared/api/job-endpoints';
+import { roundInHand } from '@/components/footing/round-in-hand';
 import { i18n } from '@/hooks/i18n/i18n';
 
 export interface WaitingWords {
@@ -11,12 +12,12 @@ export interface WaitingWords {
 }
 
 /** Where a thing that waits is done. One that lacks its own id leads to the list it is in. */
-function hrefOf({ what, jobId, footingId, roundId }: Waiting): Href {
+function hrefOf({ what, jobId, footingId, roundId, shot }: Waiting): Href {
   if (what === 'enter-laser') return '/lasers/new';
   if (what === 'enter-job') return '/jobs/new';
   if (roundId !== null && what === 'see-results') return { pathname: '/rounds/[roundId]/results', params: { roundId } };
   if (roundId !== null && (what === 'finish-round' || what === 'mend-rails')) {
-    return { pathname: '/rounds/[roundId]/shoot', params: { roundId } };
+    return roundInHand({ id: roundId, shot });
   }
   if (footingId !== null && what === 'draw-outline') return { pathname: '/footings/[footingId]/outline', params: { footingId } };
   if (footingId !== null && what === 'set-stations') return { pathname: '/footings/[footingId]/stations', params: { footingId } };
@@ -27,7 +28,7 @@ function hrefOf({ what, jobId, footingId, roundId }: Waiting): Href {
 /** What waits, said as the thing to do, with the button that does it. */
 export function waitingWords(waiting: Waiting): WaitingWords {
   const { what, shot, of } = waiting;
-  const counted = shot !== null && of !== null ? i18n.t('today:counted', { shot, of }) : null;
+  const counted = shot !== null && of !== null && of > 0 ? i18n.t('today:counted', { shot, of }) : null;
   const place = waiting.jobName;
   return {
     title: i18n.t(`today:waiting.${what}.title`, { footing: waiting.footingName ?? '' }),
