@@ -34,7 +34,7 @@ interface Factored {
 /** Householder's reflections, column by column, carried through `values` too. Overwrites its arguments. */
 function factor(columns: readonly Float64Array[], values: Float64Array): Factored {
   columns.forEach((column, k) => {
-    const whole = Math.sqrt(column.reduce((sum, entry) => sum + entry * entry, 0));
+    const whole = inRange('column', Math.sqrt(column.reduce((sum, entry) => sum + entry * entry, 0)));
     const below = column.subarray(k);
     const norm = Math.sqrt(below.reduce((sum, entry) => sum + entry * entry, 0));
     if (!(norm > DEPENDENT * whole)) {
