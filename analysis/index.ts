@@ -1,5 +1,6 @@
 /** The maths of the product: pure functions on whole nanometres. docs/maths.md explains each result. */
 export * from './analysis-error';
+export * from './capability';
 export * from './concrete';
 export * from './course';
 export * from './flatness';
@@ -9,7 +10,10 @@ export * from './level-notes';
 export * from './misclosure';
 export { cornerLetter, diagonals, traceOutline, type Diagonal } from './outline';
 export * from './outline-offset';
+export * from './rotating-laser-test';
 export * from './stations-along';
+export * from './taped-diagonals';
+export * from './tolerance-rules';
 export * from './types';
 export * from './units';
 export * from './verdict';
