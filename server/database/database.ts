@@ -3,28 +3,40 @@ import { QueryFailedError, type DataSource, type EntityManager, type QueryRunner
 import type { Logger } from 'pino';
 import { ApiError, DatabaseAway } from '../errors';
 
+/** Work under one of the two roles that the server may take. */
+export interface Transactions {
+  /** People, credentials, sessions, and entry into a company. */
+  asIdentity<T>(work: (manager: EntityManager) => Promise<T>): Promise<T>;
+  /** One company's data. */
+  asCompany<T>(companyId: string, work: (manager: EntityManager) => Promise<T>): Promise<T>;
+}
+
+/** Takes a role, and with the company's the company, until the transaction ends or takes another. */
+export async function takeRole(manager: EntityManager, role: 'identity' | 'company', companyId = ''): Promise<void> {
+  const name = role === 'identity' ? 'tallyrod_identity' : 'tallyrod_app';
+  await manager.query(`select set_config('role', $1, true), set_config('app.company_id', $2, true)`, [name, companyId]);
+}
+
 /**
  * The only way to the database. The server's sign-in has no rights of its own: each transaction takes a role for its own length,
  * and with the company's role the company, by which row-level security shows it that company's rows and no others.
  */
-export class Database {
+export class Database implements Transactions {
   constructor(
     private readonly source: DataSource,
     private readonly logger: Pick<Logger, 'warn'>,
   ) {}
 
-  /** People, credentials, sessions, and entry into a company. */
   asIdentity<T>(work: (manager: EntityManager) => Promise<T>): Promise<T> {
     return this.transaction(async (runner) => {
-      await runner.query(`select set_config('role', 'tallyrod_identity', true)`);
+      await takeRole(runner.manager, 'identity');
       return work(runner.manager);
     });
   }
 
-  /** One company's data. */
   asCompany<T>(companyId: string, work: (manager: EntityManager) => Promise<T>): Promise<T> {
     return this.transaction(async (runner) => {
-      await runner.query(`select set_config('role', 'tallyrod_app', true), set_config('app.company_id', $1, true)`, [companyId]);
+      await takeRole(runner.manager, 'company', companyId);
       return work(runner.manager);
     });
   }
@@ -93,9 +105,5 @@ export function sqlState(error: unknown): string | undefined {
 /** A row with this key, or this name, is there already. */
 export const UNIQUE_VIOLATION = '23505';
 
-/** The constraint that was violated, as PostgreSQL names it. */
-export function constraintOf(error: unknown): string | undefined {
-  return error instanceof QueryFailedError && error.driverError instanceof DatabaseError
-    ? error.driverError.constraint
-    : undefined;
-}
+/** Text with a character that PostgreSQL keeps in no text: NUL. */
+export const UNTENABLE_TEXT = '22021';

@@ -2,6 +2,7 @@ import type { ErrorRequestHandler } from 'express';
 import type { Logger } from 'pino';
 import { z } from 'zod';
 import type { ErrorCode } from '@/shared/error-codes';
+import { sqlState, UNTENABLE_TEXT } from '../database/database';
 import { ApiError } from '../errors';
 
 /** What Express and its body reader throw: an HTTP status, and for the reader a kind. */
@@ -20,6 +21,7 @@ export function answerErrors(logger: Logger): ErrorRequestHandler {
 
 function toApiError(error: unknown): ApiError {
   if (error instanceof ApiError) return error;
+  if (sqlState(error) === UNTENABLE_TEXT) return new ApiError('body-invalid', 'A text has a character that no text may have.');
   const http = httpErrorSchema.safeParse(error);
   if (!http.success)
     return new ApiError('server-fault', 'Something went wrong on the server. It is in the log.', undefined, { cause: error });

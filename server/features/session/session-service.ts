@@ -2,7 +2,7 @@ import type { Me, Session } from '@/shared/api/session-endpoints';
 import { ROLES } from '@/shared/roles';
 import type { EntityManager } from 'typeorm';
 import { issueAccessToken } from '../../api/access-token';
-import { sqlState, UNIQUE_VIOLATION } from '../../database/database';
+import { sqlState, UNIQUE_VIOLATION, type Transactions } from '../../database/database';
 import { newId, type Dependencies } from '../../dependencies';
 import { Company, Credential, Membership, Person, SignInSession } from '../../entities/people';
 import { ApiError, notPossible } from '../../errors';
@@ -23,7 +23,9 @@ export interface SignedIn {
   refresh: FreshToken;
 }
 
-type Needs = Pick<Dependencies, 'config' | 'database' | 'sources'>;
+type Needs = Pick<Dependencies, 'config' | 'sources'> & { database: Transactions };
+
+export const SALT_BYTES = 16;
 
 /** The one answer to a wrong passphrase and to an address that nobody has. */
 function signInRefused(): ApiError {
@@ -40,7 +42,7 @@ export async function signUp(needs: Needs, input: SignUp): Promise<SignedIn> {
   }
   const known = await needs.database.asIdentity((manager) => findPerson(manager, input.email));
   if (known !== null && !(await isPassphrase(input.password, known.hash))) throw signInRefused();
-  const hash = known === null ? await hashPassphrase(input.password) : null;
+  const hash = known === null ? await hashPassphrase(input.password, needs.sources.randomBytes(SALT_BYTES)) : null;
   try {
     return await needs.database.asIdentity(async (manager) => {
       const personId = known?.person.id ?? newId(needs.sources);

@@ -53,12 +53,15 @@ function shootingWaits(view: FootingView, actor: Actor): Waiting[] {
   const begun = view.rounds.filter(({ row, state }) => row.closedAt === null && (state.shot < state.of || state.of === 0));
   const mine = begun.filter(({ row }) => row.surface === 'top' || may(actor.roles, 'round.any-surface'));
   if (mine.length > 0) return mine.map((round) => at(view, 'finish-round', round));
-  if (!done.includes('rails') && !done.includes('top')) {
-    if (!may(actor.roles, 'round.any-surface')) return [];
-    const rails = newest(view, 'rails');
-    return [rails?.state.verdict === 'not-to-grade' ? at(view, 'mend-rails', rails) : at(view, 'shoot-rails', rails)];
+  const rails = newest(view, 'rails');
+  const top = newest(view, 'top');
+  if (top === undefined && rails?.state.verdict === 'not-to-grade' && may(actor.roles, 'round.any-surface')) {
+    return [at(view, 'mend-rails', rails)];
   }
-  return done.includes('top') ? [] : [at(view, 'shoot-top', newest(view, 'top'))];
+  if (!done.includes('rails') && !done.includes('top')) {
+    return may(actor.roles, 'round.any-surface') ? [at(view, 'shoot-rails', rails)] : [];
+  }
+  return done.includes('top') ? [] : [at(view, 'shoot-top', top)];
 }
 
 /** What waits for whoever says whether the wall goes on: the top, once it is all shot. */
