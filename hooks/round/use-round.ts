@@ -19,6 +19,8 @@ export type RoundView =
       tryAgain(): void;
     };
 
+export type ReadyRound = Extract<RoundView, { status: 'ready' }>;
+
 /**
  * A round as it stands: what the server has and what is still on this phone, folded by the one reducer. Records that the
  * server refused are not part of it; they stand on the list of what needs somebody.
