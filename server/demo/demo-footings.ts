@@ -71,7 +71,7 @@ export async function orchardRow(demo: Demo): Promise<void> {
   });
   const good = { ...near, laserId: instruments.good, backsight: 4 * FOOT + 2 * INCH + 9 * SIXTEENTH };
   const tilted = (place: Place) =>
-    wholeMarks(-INCH / 16 - (place.x / FOOT - 22) * (0.42 / 44) * INCH + 0.3 * jitter(demo, INCH / 8), SIXTEENTH);
+    wholeMarks(-0.1 * INCH - (place.x / FOOT - 22) * (0.42 / 44) * INCH + 0.2 * jitter(demo, INCH / 8), SIXTEENTH);
   await shootRound(crew, sources, ell, {
     surface: 'top',
     role: 'installer',
