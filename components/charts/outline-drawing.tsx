@@ -130,7 +130,7 @@ function RunLengths({ runs, fit, corners, closed, size, band }: RunLengthsProps)
       return {
         key: run.id,
         text: run.length,
-        middle: { x: (from.x + to.x) / 2 + way.x * away, y: (from.y + to.y) / 2 + way.y * away },
+        middles: [1, -1].map((side) => beside(from, to, way, side * away)),
       };
     }),
     size,
@@ -139,6 +139,12 @@ function RunLengths({ runs, fit, corners, closed, size, band }: RunLengthsProps)
   const doubtful = new Set(runs.filter((run) => run.doubtful).map(({ id }) => id));
   return <PlanTexts texts={texts} fill={(key) => (doubtful.has(key) ? tokens.high : tokens.ink)} />;
 }
+
+/** The place at a distance from the middle of a run, along a direction. */
+const beside = (from: Spot, to: Spot, way: Spot, away: number): Spot => ({
+  x: (from.x + to.x) / 2 + way.x * away,
+  y: (from.y + to.y) / 2 + way.y * away,
+});
 
 /** The normal of a run on the side that its first corner faces away to. */
 function normalOn({ from, to }: { from: Spot; to: Spot }, corner: Spot | undefined): Spot {

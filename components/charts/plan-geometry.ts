@@ -153,8 +153,8 @@ export interface PlacedText {
 interface TextWish {
   key: string;
   text: string;
-  /** Middle of the text. */
-  middle: Spot;
+  /** Where the middle of the text may stand, best first. */
+  middles: readonly Spot[];
 }
 
 /** A part of the picture, in px, that words keep clear of. */
@@ -165,7 +165,7 @@ export interface TextBox {
   bottom: number;
 }
 
-/** Of texts in order of importance, those that fit the picture beside one another, moved in from its edges where they stick out. */
+/** Of texts in order of importance, those that find a place clear of the others, moved in from the picture's edges where they stick out. */
 export function placeTexts(
   wishes: readonly TextWish[],
   size: { width: number; height: number },
@@ -173,17 +173,22 @@ export function placeTexts(
   obstacles: readonly TextBox[] = [],
 ): PlacedText[] {
   const taken = [...obstacles];
-  return wishes.flatMap(({ key, text, middle }) => {
+  return wishes.flatMap(({ key, text, middles }) => {
     const half = textWidth(text, fontSize) / 2 + 2;
-    const x = Math.min(Math.max(middle.x, half), size.width - half);
-    const y = Math.min(Math.max(middle.y, fontSize * 0.6), size.height - fontSize * 0.6);
-    const box = { left: x - half, right: x + half, top: y - fontSize * 0.55, bottom: y + fontSize * 0.55 };
-    const hit = taken.some(
-      (other) => box.left < other.right && other.left < box.right && box.top < other.bottom && other.top < box.bottom,
-    );
-    if (hit) return [];
-    taken.push(box);
-    return [{ key, text, x, y }];
+    for (const middle of middles) {
+      const x = Math.min(Math.max(middle.x, half), size.width - half);
+      const y = Math.min(Math.max(middle.y, fontSize * 0.6), size.height - fontSize * 0.6);
+      const box = { left: x - half, right: x + half, top: y - fontSize * 0.55, bottom: y + fontSize * 0.55 };
+      if (
+        taken.some(
+          (other) => box.left < other.right && other.left < box.right && box.top < other.bottom && other.top < box.bottom,
+        )
+      )
+        continue;
+      taken.push(box);
+      return [{ key, text, x, y }];
+    }
+    return [];
   });
 }
 

@@ -118,7 +118,9 @@ function PlanGround({
       const spot = spots[at] ?? { x: 0, y: 0 };
       const way = out[at] ?? { x: 0, y: -1 };
       const away = band / 2 + 18;
-      return { key: `${at}`, text: label, middle: { x: spot.x + way.x * away, y: spot.y + way.y * away } };
+      // Outside, then to its sides, then inside: a letter that has to move is better than a corner without a name.
+      const ways = [way, { x: way.y, y: -way.x }, { x: -way.y, y: way.x }, { x: -way.x, y: -way.y }];
+      return { key: `${at}`, text: label, middles: ways.map((to) => ({ x: spot.x + to.x * away, y: spot.y + to.y * away })) };
     }),
     size,
     typeSize.small,
@@ -172,7 +174,7 @@ function Tilt({
   const upright = Math.abs(Math.cos((tilt.azimuth * Math.PI) / 180));
   const lift = 10 + upright * Math.min(size.width * 0.13, 55);
   const [label] = placeTexts(
-    [{ key: 'tilt', text: tilt.text, middle: { x: middle.x, y: middle.y + 8 - lift } }],
+    [{ key: 'tilt', text: tilt.text, middles: [{ x: middle.x, y: middle.y + 8 - lift }] }],
     size,
     typeSize.small,
   );

@@ -53,16 +53,14 @@ export interface ProfileGeometry {
 }
 
 /** Room over the highest and under the lowest height for the marks that are drawn there, in px. */
-const markRoom = 8;
+const markRoom = 7;
 /** Heights beyond this many tolerances are drawn at the edge: a misread foot must not flatten everything else. */
 const mostTolerances = 8;
-const roundSteps = [1, 1.2, 1.5, 2, 2.5, 3, 4, 5, 6, 8];
 
-/** The largest round number (1, 1.2, 1.5 … 8 times a power of ten) that is at most `value`. */
+/** The largest number of two figures (840, 1,200) that is at most `value`: an exaggeration that can be said in a word. */
 export function roundDown(value: number): number {
-  const power = 10 ** Math.floor(Math.log10(value));
-  const step = [...roundSteps].reverse().find((candidate) => candidate * power <= value * (1 + 1e-12)) ?? 1;
-  return Number((step * power).toPrecision(3));
+  const step = 10 ** (Math.floor(Math.log10(value)) - 1);
+  return Number((Math.floor(value / step + 1e-9) * step).toPrecision(2));
 }
 
 /** Range of heights to show: the tolerance with as much again outside it, and every reading within reason. */

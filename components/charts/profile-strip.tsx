@@ -22,12 +22,12 @@ interface ProfileStripProps {
   units: ChartUnits;
   /** Station being shot: a dotted vertical. */
   currentId?: string;
-  /** In px; 88 unless said. */
+  /** In px; 96 unless said. */
   height?: number;
 }
 
 /** The footing unrolled, in a strip: what has been shot hangs over or under the string line, the rest are ticks on it. */
-export function ProfileStrip({ height = 88, currentId, ...data }: ProfileStripProps) {
+export function ProfileStrip({ height = 96, currentId, ...data }: ProfileStripProps) {
   const { t } = useTranslation('charts');
   const [width, onLayout] = useMeasuredWidth();
   const geometry = profileGeometry({ ...data, width, height });

@@ -84,7 +84,7 @@ function PhoneHeader({ title, subtitle, back, pill, large }: Omit<ScreenProps, '
 
 function WideHeader({ title, subtitle, crumbs = [], pill, actions }: Omit<ScreenProps, 'children'>) {
   return (
-    <View style={styles.header}>
+    <View style={[styles.header, styles.wideHeader]}>
       <View style={styles.titles}>
         {crumbs.length > 0 ? <Crumbs crumbs={crumbs} /> : null}
         <Heading level={1} size="title">
@@ -136,6 +136,7 @@ const styles = StyleSheet.create({
   body: { width: '100%', alignSelf: 'center', paddingHorizontal: space.l - 2, paddingBottom: space.l, gap: space.m },
   wideBody: { width: '100%', alignSelf: 'center', paddingHorizontal: space.xl, paddingBottom: space.xl, gap: space.l },
   header: { flexDirection: 'row', alignItems: 'center', flexWrap: 'wrap', gap: space.s, paddingTop: space.m, minHeight: 56 },
+  wideHeader: { paddingTop: space.xl - 2 },
   titles: { flexGrow: 1, flexShrink: 1, flexBasis: 120, minWidth: 0 },
   back: {
     width: target.least,
