@@ -42,13 +42,19 @@ export function verdictWords({ deviation, verdict, close }: ShotVerdict, bundle:
   return { ...common, length: markWords(deviation, bundle.job), ...actionWords(surface, side, out) };
 }
 
+/** Stands for the length, which is drawn apart from the words. */
+const GAP = '\u2007';
+
 function actionWords(
   surface: Surface,
   side: 'low' | 'high',
   out: boolean,
 ): Pick<VerdictWords, 'arrow' | 'before' | 'after' | 'advice'> {
-  const before = i18n.t(`shoot:verdict.${surface}.${side}.before`);
-  const after = i18n.t(`shoot:verdict.${surface}.${side}.after`);
+  // The language decides on which side of its words the length stands.
+  const [before = '', after = ''] = i18n
+    .t(`shoot:verdict.${surface}.${side}`, { length: GAP })
+    .split(GAP)
+    .map((part) => part.trim());
   if (surface === 'dig' && side === 'low') return { arrow: null, before, after, advice: i18n.t('shoot:advice.pourFull') };
   if (surface === 'top')
     return { arrow: null, before, after, advice: side === 'high' && out ? i18n.t('shoot:advice.grind') : null };
