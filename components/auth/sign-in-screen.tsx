@@ -25,7 +25,7 @@ export function SignInScreen() {
   });
   return (
     <AuthFrame title={t('signIn.title')}>
-      <FormBox label={t('signIn.title')} onSubmit={() => void submit()}>
+      <FormBox onSubmit={() => void submit()}>
         <FormTextField
           control={control}
           name="email"

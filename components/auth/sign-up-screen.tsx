@@ -37,7 +37,7 @@ export function SignUpScreen() {
   return (
     <AuthFrame title={t('auth:signUp.title')}>
       <Body tone="ink2">{t('auth:signUp.allRoles')}</Body>
-      <FormBox label={t('auth:signUp.title')} onSubmit={() => void submit()}>
+      <FormBox onSubmit={() => void submit()}>
         <FormTextField
           control={control}
           name="company"

@@ -98,7 +98,7 @@ function BenchmarkForm({ job, back }: { job: Job; back: Href }) {
     >
       <Columns>
         <Column>
-          <FormBox label={t('benchmark.title')} onSubmit={form.submit}>
+          <FormBox onSubmit={form.submit}>
             <FormTextField
               control={control}
               name="name"

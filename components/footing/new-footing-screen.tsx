@@ -80,7 +80,7 @@ function NewFooting({ job }: { job: Job }) {
       maxWidth={1100}
       actions={<Button variant="primary" size="large" grow label={t('footing:new.submit')} busy={busy} onPress={submit} />}
     >
-      <FormBox label={t('footing:new.title')} onSubmit={submit}>
+      <FormBox onSubmit={submit}>
         <FormRefusal sentence={refusal} />
         <Columns>
           <Column>

@@ -35,7 +35,6 @@ export function BedRuleCard({ job }: { job: Job }) {
       ) : null}
       {open ? (
         <RuleEditor<BedForm>
-          label={t('jobs:bed.change')}
           defaultValues={{ bed: bedDraft(rule) }}
           save={({ bed }) => setRule.mutateAsync(readBed(bed, job.unitStyle))}
           onClose={() => setOpen(false)}

@@ -110,7 +110,7 @@ function NewJob() {
       }
     >
       <FormProvider {...form}>
-        <FormBox label={t('new.title')} onSubmit={submit}>
+        <FormBox onSubmit={submit}>
           <FormRefusal sentence={refusal} />
           <Columns>
             <Column>

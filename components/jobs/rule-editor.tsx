@@ -9,7 +9,6 @@ import { Button } from '@/components/ui/button';
 import { Body } from '@/components/ui/text';
 
 interface RuleEditorProps<Values extends FieldValues> {
-  label: string;
   defaultValues: DefaultValues<Values>;
   /** Sends a new version. */
   save: (values: Values) => Promise<unknown>;
@@ -18,13 +17,7 @@ interface RuleEditorProps<Values extends FieldValues> {
 }
 
 /** The form of one rule of a job. Saving makes a new version; rounds keep the one that they were opened under. */
-export function RuleEditor<Values extends FieldValues>({
-  label,
-  defaultValues,
-  save,
-  onClose,
-  children,
-}: RuleEditorProps<Values>) {
+export function RuleEditor<Values extends FieldValues>({ defaultValues, save, onClose, children }: RuleEditorProps<Values>) {
   const { t } = useTranslation(['jobs', 'common']);
   const form = useForm<Values>({ defaultValues });
   const [refusal, setRefusal] = useState<string | null>(null);
@@ -39,7 +32,7 @@ export function RuleEditor<Values extends FieldValues>({
   });
   return (
     <FormProvider {...form}>
-      <FormBox label={label} onSubmit={() => void submit()}>
+      <FormBox onSubmit={() => void submit()}>
         {children}
         <Body size="small" tone="ink2">
           {t('jobs:rule.newVersion')}

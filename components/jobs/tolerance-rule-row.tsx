@@ -47,13 +47,12 @@ export function ToleranceRuleRow({ job, surface, last }: RowProps) {
           style={styles.change}
         />
       ) : null}
-      {open ? <ToleranceEditor job={job} rule={rule} name={name} onClose={() => setOpen(false)} /> : null}
+      {open ? <ToleranceEditor job={job} rule={rule} onClose={() => setOpen(false)} /> : null}
     </View>
   );
 }
 
-function ToleranceEditor({ job, rule, name, onClose }: { job: Job; rule: ToleranceRule; name: string; onClose: () => void }) {
-  const { t } = useTranslation('jobs');
+function ToleranceEditor({ job, rule, onClose }: { job: Job; rule: ToleranceRule; onClose: () => void }) {
   const setRule = useSetToleranceRule(job.id);
   const { surface } = rule;
   // The form of all four surfaces with one of them shown: the fields are the same as in a new job.
@@ -62,7 +61,6 @@ function ToleranceEditor({ job, rule, name, onClose }: { job: Job; rule: Toleran
   };
   return (
     <RuleEditor<RulesForm>
-      label={t('rule.changeOf', { surface: name })}
       defaultValues={defaultValues}
       save={({ rules }) => setRule.mutateAsync({ surface, rule: readTolerance(rules[surface], job.unitStyle) })}
       onClose={onClose}

@@ -102,7 +102,7 @@ function NewLaser() {
       }
     >
       <Body tone="ink2">{t('newLaser.why')}</Body>
-      <FormBox label={t('newLaser.title')} onSubmit={submit}>
+      <FormBox onSubmit={submit}>
         <FormRefusal sentence={refusal} />
         <FormTextField control={control} name="name" label={t('newLaser.name')} hint={t('newLaser.nameHint')} maxLength={120} />
         <FormChoice

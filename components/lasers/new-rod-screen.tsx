@@ -66,7 +66,7 @@ function NewRod() {
         />
       }
     >
-      <FormBox label={t('lasers:newRod.title')} onSubmit={() => void submit()}>
+      <FormBox onSubmit={() => void submit()}>
         <FormRefusal sentence={refusal} />
         <FormTextField
           control={control}

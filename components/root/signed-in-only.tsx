@@ -1,5 +1,5 @@
 import { Redirect, usePathname } from 'expo-router';
-import type { ReactNode } from 'react';
+import { useState, type ReactNode } from 'react';
 import { useTranslation } from 'react-i18next';
 import { AppShell } from '@/components/shell/app-shell';
 import { Brand } from '@/components/shell/brand';
@@ -11,14 +11,20 @@ import { useSession } from '@/hooks/session/use-session';
 import { startSession } from '@/hooks/session/use-session-start';
 import { roleWords } from './role-words';
 
+/** The door, with the address that was wanted: as it was at first, since it changes while the redirect is under way. */
+function ToSignIn() {
+  const pathname = usePathname();
+  const [wanted] = useState(pathname);
+  return <Redirect href={wanted === '/' ? '/sign-in' : { pathname: '/sign-in', params: { next: wanted } }} />;
+}
+
 /** The shell, for whoever is signed in; anybody else is asked to sign in and comes back to the address they wanted. */
 export function SignedInOnly({ children }: { children: ReactNode }) {
   const session = useSession();
-  const pathname = usePathname();
   const { t } = useTranslation('auth');
   useOutboxRunner();
   if (session.status === 'signed-out') {
-    return <Redirect href={pathname === '/' ? '/sign-in' : { pathname: '/sign-in', params: { next: pathname } }} />;
+    return <ToSignIn />;
   }
   if (session.status === 'signed-in') {
     const { me } = session;

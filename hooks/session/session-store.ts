@@ -1,8 +1,9 @@
 import { meSchema, type Me, type Session } from '@/shared/api/session-endpoints';
 
 /**
- * Who is signed in here. `starting`: the server has not been asked yet and nobody is remembered. `signed-in` without a token: the
- * server could not be reached, and the phone goes on with whoever it remembers, because a dead spot is not a sign-out.
+ * Who is signed in here. `signed-in` without a token: this browser remembers somebody, and the server has not answered yet or cannot be
+ * reached; the phone goes on with them, because a dead spot is not a sign-out. `starting`: the browser keeps nothing for us, so only
+ * the server can tell.
  */
 export type SessionState =
   | { status: 'starting'; me: null; accessToken: null; reached: boolean }
@@ -13,7 +14,7 @@ const REMEMBERED = 'tallyrod.me';
 const CHANNEL = 'tallyrod.session';
 
 const blank = { me: null, accessToken: null } as const;
-let state: SessionState = { status: 'starting', ...blank, reached: true };
+let state: SessionState = asRemembered();
 const listeners = new Set<() => void>();
 const channel = typeof BroadcastChannel === 'undefined' ? null : new BroadcastChannel(CHANNEL);
 
@@ -22,23 +23,38 @@ function set(next: SessionState): void {
   for (const listener of listeners) listener();
 }
 
-/** Names and roles, no secret: enough to go on recording where there is no signal. The token never leaves memory. */
-function remember(me: Me | null): void {
-  if (typeof localStorage === 'undefined') return;
-  if (me === null) localStorage.removeItem(REMEMBERED);
-  else localStorage.setItem(REMEMBERED, JSON.stringify(me));
+/** What the browser keeps for us; null where it keeps nothing (a locked-down one throws at the mere name). */
+function storage(): Storage | null {
+  try {
+    return typeof localStorage === 'undefined' ? null : localStorage;
+  } catch {
+    return null;
+  }
 }
 
-function remembered(): Me | null {
-  const text = typeof localStorage === 'undefined' ? null : localStorage.getItem(REMEMBERED);
-  if (text === null) return null;
+/** Names and roles, no secret: enough to go on recording where there is no signal. The token never leaves memory. */
+function remember(me: Me | null): void {
+  if (me === null) storage()?.removeItem(REMEMBERED);
+  else storage()?.setItem(REMEMBERED, JSON.stringify(me));
+}
+
+function readMe(text: string): Me | null {
   try {
     return meSchema.parse(JSON.parse(text));
   } catch {
     // Written by an older version or by hand: as good as nobody remembered.
-    localStorage.removeItem(REMEMBERED);
     return null;
   }
+}
+
+/** Where the app starts. Nobody remembered is nobody signed in: signing out forgets, and so does the browser, cookie and all. */
+function asRemembered(): SessionState {
+  const kept = storage();
+  if (kept === null) return { status: 'starting', ...blank, reached: true };
+  const text = kept.getItem(REMEMBERED);
+  const me = text === null ? null : readMe(text);
+  if (me === null) return { status: 'signed-out', ...blank, reached: true };
+  return { status: 'signed-in', me, accessToken: null, reached: true };
 }
 
 /** Reads; `useSession` is for screens. */
@@ -64,15 +80,9 @@ export function sessionEnded({ tell }: { tell: boolean }): void {
   if (tell) channel?.postMessage('ended');
 }
 
-/** The server could not be asked: go on with whoever is remembered; with nobody, stay at the start and say so. */
+/** The server could not be asked: nothing is known but that, and whoever was signed in still is. */
 export function serverNotReached(): void {
-  if (state.status === 'signed-out') return;
-  const me = state.me ?? remembered();
-  set(
-    me === null
-      ? { status: 'starting', ...blank, reached: false }
-      : { status: 'signed-in', me, accessToken: state.accessToken, reached: false },
-  );
+  if (state.status !== 'signed-out') set({ ...state, reached: false });
 }
 
 channel?.addEventListener('message', (event: MessageEvent<unknown>) => {

@@ -15,14 +15,14 @@ export async function startSession(): Promise<void> {
 /** How often, ms, a server that did not answer at the start is asked again; `online` events are not told to every browser. */
 const ASK_AGAIN = 15_000;
 
-/** Signs in silently by the refresh cookie when the app starts, and goes on asking until the server has answered once. */
+/** Signs in silently by the refresh cookie when the app starts with somebody remembered, and goes on asking until the server has answered. */
 export function useSessionStart(): void {
   useEffect(() => {
     const again = () => {
       const { status, accessToken } = sessionState();
       if (status !== 'signed-out' && accessToken === null) void startSession();
     };
-    void startSession();
+    again();
     const timer = setInterval(again, ASK_AGAIN);
     window.addEventListener('online', again);
     return () => {
