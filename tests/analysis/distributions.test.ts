@@ -1,6 +1,6 @@
 import tCdf from '@stdlib/stats-base-dists-t-cdf';
 import fCdf from '@stdlib/stats-base-dists-f-cdf';
-import fc from 'fast-check';
+import * as fc from 'fast-check';
 import { AnalysisError } from '@/analysis/analysis-error';
 import { fUpperTail, studentTwoSided, studentUpperQuantile } from '@/analysis/distributions';
 import { apart } from '../support/closeness';

@@ -1,6 +1,6 @@
 import { readFileSync } from 'node:fs';
 import path from 'node:path';
-import fc from 'fast-check';
+import * as fc from 'fast-check';
 import { z } from 'zod';
 import { AnalysisError } from '@/analysis/analysis-error';
 import { leastSquares } from '@/analysis/least-squares';

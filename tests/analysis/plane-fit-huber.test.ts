@@ -1,4 +1,4 @@
-import fc from 'fast-check';
+import * as fc from 'fast-check';
 import { huberRegression } from '@/analysis/huber-regression';
 import { fitPlane } from '@/analysis/plane-fit';
 import { fitPlaneHuber } from '@/analysis/plane-fit-huber';

@@ -1,4 +1,4 @@
-import fc from 'fast-check';
+import * as fc from 'fast-check';
 import { minimaxFit } from '@/analysis/minimax';
 import { fitPlane } from '@/analysis/plane-fit';
 import { fitPlaneMinimumZone } from '@/analysis/plane-fit-minimum-zone';

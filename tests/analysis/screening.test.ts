@@ -1,4 +1,4 @@
-import fc from 'fast-check';
+import * as fc from 'fast-check';
 import { AnalysisError } from '@/analysis/analysis-error';
 import { studentUpperQuantile } from '@/analysis/distributions';
 import { fitPlane } from '@/analysis/plane-fit';

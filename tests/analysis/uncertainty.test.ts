@@ -1,4 +1,4 @@
-import fc from 'fast-check';
+import * as fc from 'fast-check';
 import { AnalysisError } from '@/analysis/analysis-error';
 import { shotUncertainty } from '@/analysis/uncertainty';
 import { NM_PER_INCH } from '@/analysis/units';
