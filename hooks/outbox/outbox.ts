@@ -118,9 +118,7 @@ export class Outbox {
     this.cancelWait?.();
     this.cancelWait = null;
     this.again = true;
-    this.running ??= this.sendAll().finally(() => {
-      this.running = null;
-    });
+    this.running ??= this.sendAll();
   }
 
   /** Resolves once nothing is under way: for tests, and before signing out. */
@@ -129,21 +127,28 @@ export class Outbox {
   }
 
   private async sendAll(): Promise<void> {
-    while (this.again) {
-      this.again = false;
-      try {
-        await this.parts.alone(() => this.sendBatches());
-        this.failures = 0;
-      } catch (error) {
-        this.failures += 1;
-        if (!(error instanceof ApiError) && !(error instanceof OfflineError)) this.parts.report(error);
-        // Signed out: the next sign-in sends.
-        if (error instanceof ApiError && error.status === 401) continue;
-        this.cancelWait?.();
-        this.cancelWait = this.parts.after(waitAfter(this.failures), () => this.send());
-      } finally {
-        this.set({ sending: false });
-      }
+    try {
+      while (this.again) await this.sendOnce();
+    } finally {
+      // In the same breath as the last look at `again`: a record kept after that begins a new run.
+      this.running = null;
+    }
+  }
+
+  private async sendOnce(): Promise<void> {
+    this.again = false;
+    try {
+      await this.parts.alone(() => this.sendBatches());
+      this.failures = 0;
+    } catch (error) {
+      this.failures += 1;
+      if (!(error instanceof ApiError) && !(error instanceof OfflineError)) this.parts.report(error);
+      // Signed out: the next sign-in sends.
+      if (error instanceof ApiError && error.status === 401) return;
+      this.cancelWait?.();
+      this.cancelWait = this.parts.after(waitAfter(this.failures), () => this.send());
+    } finally {
+      this.set({ sending: false });
     }
   }
 
