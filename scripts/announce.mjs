@@ -11,20 +11,30 @@ export class Stop extends Error {
   }
 }
 
+/** How often a silent step says that it is still at it. */
+const PATIENCE_MS = 15_000;
+
 /**
  * Says a step when it begins, and how long it took when that was a second or more.
  * @template T
  * @param {string} label
  * @param {() => T | Promise<T>} work
+ * @param {{ silent?: boolean }} [options] silent: the work writes nothing itself, so a long one says now and then that it goes on
  * @returns {Promise<T>}
  */
-export async function step(label, work) {
+export async function step(label, work, { silent = true } = {}) {
   const began = performance.now();
+  const seconds = () => (performance.now() - began) / 1000;
   console.log(`· ${label} …`);
-  const result = await work();
-  const seconds = (performance.now() - began) / 1000;
-  if (seconds >= 1) console.log(`  took ${seconds.toFixed(1)} s`);
-  return result;
+  const patience = silent
+    ? setInterval(() => console.log(`  still at it after ${seconds().toFixed(0)} s`), PATIENCE_MS)
+    : undefined;
+  try {
+    return await work();
+  } finally {
+    clearInterval(patience);
+    if (seconds() >= 1) console.log(`  took ${seconds().toFixed(1)} s`);
+  }
 }
 
 /**
@@ -32,5 +42,7 @@ export async function step(label, work) {
  * @param {unknown} failure
  */
 export function sayFailure(failure) {
-  console.error(failure instanceof Stop ? `\n${failure.message}\n` : failure);
+  // By name: one process may hold this file twice (see child.mjs), and so two classes Stop.
+  const isStop = failure instanceof Error && failure.name === 'Stop';
+  console.error(isStop ? `\n${failure.message}\n` : failure);
 }

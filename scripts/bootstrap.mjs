@@ -91,11 +91,15 @@ async function ensureNpmPackages(root) {
   if (existsSync(stamp) && readFileSync(stamp, 'utf8') === hash) return;
   // A person who ran npm install by hand has what the lock asks for: taking that away to lay it again helps nobody.
   if (!existsSync(installed) || !installMatchesLock(readJson(lockFile), readJson(installed))) {
-    await step('Installing npm packages (one to three minutes the first time)', async () => {
-      const args = ['ci', '--include=dev', '--no-audit', '--no-fund'];
-      const { code } = await run('npm', args, { cwd: root, show: true });
-      if (code !== 0) throw new Stop('npm ci did not finish: what it said is above. Nothing else was started.');
-    });
+    await step(
+      'Installing npm packages (one to three minutes the first time)',
+      async () => {
+        const args = ['ci', '--include=dev', '--no-audit', '--no-fund'];
+        const { code } = await run('npm', args, { cwd: root, show: true });
+        if (code !== 0) throw new Stop('npm ci did not finish: what it said is above. Nothing else was started.');
+      },
+      { silent: false },
+    );
   }
   writeFileSync(stamp, hash);
 }
@@ -129,14 +133,18 @@ async function ensureDebianPackages(packages, command) {
     const { code } = isRoot ? await run('env', line, { show: true }) : await run('sudo', ['-n', 'env', ...line], { show: true });
     return code;
   };
-  await step(`Installing Debian packages: ${missing.join(', ')}`, async () => {
-    await apt('update');
-    const code = await apt('install', '-y', '--no-install-recommends', ...missing);
-    const still = missing.filter(isMissing);
-    if (code !== 0 || still.length > 0) {
-      throw new Stop(`apt-get could not install ${(still.length > 0 ? still : missing).join(', ')}: what it said is above.`);
-    }
-  });
+  await step(
+    `Installing Debian packages: ${missing.join(', ')}`,
+    async () => {
+      await apt('update');
+      const code = await apt('install', '-y', '--no-install-recommends', ...missing);
+      const still = missing.filter(isMissing);
+      if (code !== 0 || still.length > 0) {
+        throw new Stop(`apt-get could not install ${(still.length > 0 ? still : missing).join(', ')}: what it said is above.`);
+      }
+    },
+    { silent: false },
+  );
 }
 
 /**

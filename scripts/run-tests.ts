@@ -65,9 +65,9 @@ export async function runTests(root: string, steps: readonly TestStep[], isEndin
     for (const { name, cluster: needsCluster } of steps) {
       if (isEnding()) break;
       const checks = CHECKS[name];
-      const tally = await step(name, () =>
-        checks ? runCheck(root, checks) : runJest(root, name, needsCluster ? cluster : undefined),
-      );
+      const work = (): Promise<Tally> =>
+        checks ? runCheck(root, checks) : runJest(root, name, needsCluster ? cluster : undefined);
+      const tally = await step(name, work, { silent: false });
       console.log(`  ${name}: ${tally.passed} passed, ${tally.failed} failed\n`);
       sum = addTallies(sum, tally);
     }

@@ -31,10 +31,14 @@ export function signInTable(lines: string[]): string {
   return rows.map((row) => `  ${row.map((cell, column) => cell.padEnd(widthOf(column))).join('   ')}`.trimEnd()).join('\n');
 }
 
-async function choosePort(): Promise<number> {
+function wantedPort(): number {
   const wanted = readPort(process.env.PORT);
   if (wanted === undefined)
     throw new Stop(`PORT is "${process.env.PORT}", which is no port: it must be a number from 1 to 65535.`);
+  return wanted;
+}
+
+async function freePortFrom(wanted: number): Promise<number> {
   const port = await portFrom(wanted);
   if (port !== wanted) console.log(`  Port ${wanted} is taken by another program, so this is on ${port}.`);
   return port;
@@ -53,7 +57,7 @@ async function startServer(
   webFolder: string,
 ): Promise<ServerProcess & { address: string }> {
   const data = dataFolder(root);
-  const port = await choosePort();
+  const port = await freePortFrom(wanted);
   const address = process.env.APP_URL || `http://localhost:${port}`;
   const environment = {
     DATABASE_URL: database.url,
@@ -85,12 +89,13 @@ function sayReady(root: string, address: string, signIns: string[], began: numbe
  * @throws Stop with a sentence when a part does not come up; what had come up is ended first
  */
 export async function startProduct(root: string, began: number): Promise<RunningProduct> {
+  const wanted = wantedPort();
   const database = await startDatabase(root);
   try {
     await step('Bringing the database up to date', () => migrate(root, database.ownerUrl));
     const said = await step('Looking whether the demo is there', () => seedDemo(root, database.url));
     const webFolder = await ensureWebApp(root);
-    const server = await startServer(root, database, webFolder);
+    const server = await startServer(root, database, webFolder, wanted);
     sayReady(root, server.address, keptSignIns(join(dataFolder(root), 'demo-sign-ins.txt'), said), began);
     return {
       address: server.address,
