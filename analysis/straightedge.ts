@@ -133,7 +133,8 @@ class EdgeOverPiece {
       this.layOver(left, leftSegment + 1, rightSegment, right);
       const next = positions[order + 1];
       if (next !== undefined) {
-        const after = this.at(rightSegment + 1).station <= to ? Math.min(rightSegment + 1, this.points.length - 2) : rightSegment;
+        // An end that meets a point goes on into the next segment, and there is one: this was not the last position.
+        const after = this.at(rightSegment + 1).station <= to ? rightSegment + 1 : rightSegment;
         this.slideBetween(from, next, leftSegment, after);
       }
     }

@@ -97,6 +97,27 @@ describe('bedVolume', () => {
     expect(found.aboveLength).toBe(6 * FOOT);
   });
 
+  it('misses not one nanometre', () => {
+    const slight = (from: number, to: number) =>
+      bedVolume(
+        [
+          {
+            id: 'r',
+            width: 1e9,
+            planGrade: 0,
+            profile: [
+              { station: 0, elevation: from },
+              { station: 2e9, elevation: to },
+            ],
+          },
+        ],
+        0,
+      );
+    expect(slight(1, 0)).toEqual({ below: 0, above: 1e-9, aboveLength: 2e9 });
+    expect(slight(0, -1)).toEqual({ below: 1e-9, above: 0, aboveLength: 0 });
+    expect(slight(-1, 1)).toEqual({ below: 0.5e-9, above: 0.5e-9, aboveLength: 1e9 });
+  });
+
   it('of nothing is nothing', () => {
     expect(bedVolume([], 0)).toEqual({ below: 0, above: 0, aboveLength: 0 });
   });

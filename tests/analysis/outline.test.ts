@@ -275,6 +275,8 @@ describe('offsets between wall face, footing face and centre line', () => {
 
   it('leave a strip its length, and keep a step where it is on the ground', () => {
     expect(offsetOutline(walk([10, 0]), feet(1))).toEqual(walk([10, 0]));
+    // An L of two runs: both grow at the corner between them, neither at its free end, whatever turn is keyed there.
+    expect(offsetOutline(walk([10, 90], [10, 45]), feet(1))).toEqual(walk([11, 90], [11, 45]));
     const stepped = RECTANGLE.map((run) => ({ ...run, steps: [{ at: feet(10), by: 1 }] }));
     expect(offsetOutline(stepped, feet(1))[1]).toMatchObject({ length: feet(32), steps: [{ at: feet(11), by: 1 }] });
   });
