@@ -1,6 +1,7 @@
 import { useState } from 'react';
 import { useTranslation } from 'react-i18next';
-import { Pressable, StyleSheet, type GestureResponderEvent } from 'react-native';
+import { Pressable, StyleSheet } from 'react-native';
+import { pressedAt } from './pressed-at';
 import type { PlanPlace, PlanStation } from './chart-types';
 import { nearestSpot, type PlanFit, type Spot } from './plan-geometry';
 
@@ -8,14 +9,6 @@ interface KeyEvent {
   key: string;
   shiftKey?: boolean;
   preventDefault(): void;
-}
-
-/** Where in the element a press was. A browser's press carries offsets, a phone's native one locations. */
-function pressedAt({ nativeEvent }: GestureResponderEvent): Spot | null {
-  const native: { offsetX?: number; offsetY?: number; locationX?: number; locationY?: number } = nativeEvent;
-  const x = native.offsetX ?? native.locationX;
-  const y = native.offsetY ?? native.locationY;
-  return x === undefined || y === undefined ? null : { x, y };
 }
 
 interface StationPickerProps {

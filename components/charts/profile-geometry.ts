@@ -35,8 +35,10 @@ export interface ProfileMark extends PlacedMark {
 
 export interface ProfileGeometry {
   field: FieldBox;
-  /** Range of heights in the field. */
+  /** Heights at the field's bottom and top: a chart with this domain draws exactly what `y` says. */
   heights: { low: Nm; high: Nm };
+  /** Heights between which a mark is drawn where it belongs; beyond them it is drawn at the edge. */
+  shown: { low: Nm; high: Nm };
   view: { from: Nm; to: Nm };
   /** How many times heights are drawn larger than distances, a round number. */
   exaggeration: number;
@@ -177,7 +179,8 @@ export function profileGeometry(input: ProfileInput): ProfileGeometry {
   const inView = input.corners.filter(({ at }) => at >= view.from && at <= view.to).map(({ at, label }) => ({ x: x(at), label }));
   return {
     field,
-    heights: shown,
+    heights: { low: (grade - field.bottom) / perNm, high: (grade - field.top) / perNm },
+    shown,
     view,
     exaggeration,
     grade,

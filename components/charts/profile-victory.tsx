@@ -5,7 +5,6 @@ import Svg from 'react-native-svg';
 import { VictoryAxis } from 'victory-native/lib/components/victory-axis';
 import { VictoryChart } from 'victory-native/lib/components/victory-chart';
 import { VictoryLine } from 'victory-native/lib/components/victory-line';
-import { VictoryScatter } from 'victory-native/lib/components/victory-scatter';
 import type { Nm } from '@/analysis';
 import { fonts } from '@/constants/fonts';
 import { radius, space, target, typeSize } from '@/constants/theme';
@@ -94,14 +93,15 @@ interface ChartBodyProps {
 
 function ChartBody({ geometry, points, size }: ChartBodyProps) {
   const tokens = useTokens();
-  const { field, heights, view } = geometry;
+  const { field, heights, shown, view } = geometry;
   const labels = new Map(geometry.ticks.map(({ height, label }) => [height, label]));
   const inView = points.flatMap((point, index) => {
     const mark = geometry.marks[index];
     if (!mark || point.at < view.from || point.at > view.to) return [];
-    const y = point.deviation === null ? null : Math.min(Math.max(point.deviation, heights.low), heights.high);
+    const y = point.deviation === null ? null : Math.min(Math.max(point.deviation, shown.low), shown.high);
     return [{ x: point.at, y, mark }];
   });
+  const r = markRadius({ marks: inView.map(({ mark }) => mark), field });
   const tickText = { fontFamily: fonts.figureMedium, fontSize: typeSize.tiny, fill: tokens.ink2, padding: 8 };
   const hidden = { axis: { stroke: 'none' }, ticks: { stroke: 'none' }, grid: { stroke: 'none' }, tickLabels: tickText };
   return (
@@ -119,17 +119,24 @@ function ChartBody({ geometry, points, size }: ChartBodyProps) {
         style={hidden}
       />
       <VictoryLine data={inView} style={{ data: { stroke: tokens.ink, strokeWidth: 1.4 } }} />
-      <VictoryScatter
-        data={inView.map((item) => ({ ...item, y: item.y ?? 0 }))}
-        dataComponent={<StationMark r={markRadius({ marks: inView.map(({ mark }) => mark), field })} />}
-      />
+      <MarksLayer marks={inView.map(({ x, y, mark }) => ({ ...mark, at: x, height: y ?? 0 }))} r={r} />
     </VictoryChart>
   );
 }
 
-/** What the scatter plot draws at each place: the marks that every other picture of the product uses. */
-function StationMark({ r, x, y, datum }: { r: number; x?: number; y?: number; datum?: { mark: ProfileMark } }) {
-  return x === undefined || y === undefined || !datum ? null : <Marks marks={[{ ...datum.mark, x, y }]} r={r} />;
+interface MarksLayerProps {
+  marks: readonly (ProfileMark & { at: Nm; height: Nm })[];
+  r: number;
+  /** Handed down by the chart. */
+  scale?: { x: (at: Nm) => number; y: (height: Nm) => number };
+}
+
+/**
+ * The stations' marks on the chart's own scales, as one path a shape. A scatter plot makes a component of each point, which at
+ * 400 stations takes a slow phone a third of a second.
+ */
+function MarksLayer({ marks, r, scale }: MarksLayerProps) {
+  return scale ? <Marks marks={marks.map((mark) => ({ ...mark, x: scale.x(mark.at), y: scale.y(mark.height) }))} r={r} /> : null;
 }
 
 function ZoomKey({ name, label, onPress, off }: { name: 'plus' | 'minus'; label: string; onPress: () => void; off: boolean }) {

@@ -1,7 +1,8 @@
 import { useTranslation } from 'react-i18next';
-import { Pressable, StyleSheet, type GestureResponderEvent } from 'react-native';
+import { Pressable, StyleSheet } from 'react-native';
 import type { ChartUnits, ProfilePoint } from './chart-types';
 import { stationWords } from './describe-profile';
+import { pressedAt } from './pressed-at';
 import type { ProfileGeometry } from './profile-geometry';
 
 interface ProfileWalkerProps {
@@ -53,10 +54,7 @@ export function ProfileWalker({ points, geometry, units, at, onRead, onZoom }: P
       aria-valuemax={points.length}
       aria-valuenow={(at ?? 0) + 1}
       aria-valuetext={stationWords(here, units, t)}
-      onPress={({ nativeEvent }: GestureResponderEvent) => {
-        const native: { offsetX?: number; locationX?: number } = nativeEvent;
-        readAt(native.offsetX ?? native.locationX);
-      }}
+      onPress={(event) => readAt(pressedAt(event)?.x)}
       style={StyleSheet.absoluteFill}
     />
   );
