@@ -3,12 +3,17 @@ import { useTranslation } from 'react-i18next';
 import { StyleSheet, View } from 'react-native';
 import { describeError } from '@/components/forms/describe-error';
 import { toTheMark, type JobUnits } from '@/components/lengths/job-units';
+import { LengthField, lengthRefusal } from '@/components/lengths/length-field';
+import { printLength } from '@/components/lengths/print-length';
+import { readLength, type LengthRule } from '@/components/lengths/read-length';
 import { Button } from '@/components/ui/button';
 import { Card } from '@/components/ui/card';
 import { ListRow } from '@/components/ui/list-row';
 import { Notice } from '@/components/ui/notice';
+import { Body } from '@/components/ui/text';
 import { TextField } from '@/components/ui/text-field';
 import { space } from '@/constants/theme';
+import type { StationChange } from '@/hooks/api/footing-queries';
 import type { Footing, Station } from '@/shared/api/footing-schemas';
 import type { StationsEditor } from './use-stations-editor';
 
@@ -43,7 +48,7 @@ export function StationList({ editor, footing, units, may }: StationListProps) {
                 last={index === stations.length - 1}
               />
               {open === station.id ? (
-                <StationEditor key={station.name} editor={editor} station={station} onClose={() => setOpen(null)} />
+                <StationEditor key={station.name} editor={editor} station={station} units={units} onClose={() => setOpen(null)} />
               ) : null}
             </View>
           );
@@ -53,17 +58,34 @@ export function StationList({ editor, footing, units, may }: StationListProps) {
   );
 }
 
-/** Name a station, or remove it while nothing is shot there. */
-function StationEditor({ editor, station, onClose }: { editor: StationsEditor; station: Station; onClose: () => void }) {
+interface StationEditorProps {
+  editor: StationsEditor;
+  station: Station;
+  units: JobUnits;
+  onClose: () => void;
+}
+
+/** Name a station, and while nothing is shot there move or remove it. */
+function StationEditor({ editor, station, units, onClose }: StationEditorProps) {
   const { t } = useTranslation(['stations', 'errors']);
   const { changing, removing } = editor;
+  const exact = printLength(station.at, units.style);
   const [name, setName] = useState(station.name);
-  const [empty, setEmpty] = useState(false);
+  const [at, setAt] = useState(exact);
+  const [refused, setRefused] = useState<{ name?: string; at?: string }>({});
   const fixed = station.corner !== null || station.step !== null;
+  const rule: LengthRule = { style: units.style, sign: 'not-negative', bareDecimal: 'feet' };
   const save = () => {
-    if (name.trim() === '') return setEmpty(true);
-    if (name.trim() === station.name) return onClose();
-    changing.mutate({ stationId: station.id, change: { name: name.trim() } }, { onSuccess: onClose });
+    const unread = at === exact ? null : lengthRefusal(at, rule);
+    if (name.trim() === '') return setRefused({ name: t('errors:field.required') });
+    if (unread !== null) return setRefused({ at: unread });
+    const change: StationChange = {
+      ...(name.trim() === station.name ? {} : { name: name.trim() }),
+      // Untouched, the distance stays what it is to the nanometre, not what it is printed as.
+      ...(at === exact ? {} : { at: readLength(at, rule) }),
+    };
+    if (Object.keys(change).length === 0) return onClose();
+    changing.mutate({ stationId: station.id, change }, { onSuccess: onClose });
   };
   const error = [
     changing.variables?.stationId === station.id ? changing.error : null,
@@ -76,13 +98,27 @@ function StationEditor({ editor, station, onClose }: { editor: StationsEditor; s
         value={name}
         onChangeText={(typed) => {
           setName(typed);
-          setEmpty(false);
+          setRefused({});
         }}
         onSubmitEditing={save}
-        error={empty ? t('errors:field.required') : undefined}
+        error={refused.name}
         maxLength={120}
         autoFocus
       />
+      {fixed ? (
+        <Body size="small">{t('edit.fixed')}</Body>
+      ) : (
+        <LengthField
+          {...rule}
+          label={t('edit.at', { name: station.name })}
+          value={at}
+          onChange={(typed) => {
+            setAt(typed);
+            setRefused({});
+          }}
+          error={refused.at}
+        />
+      )}
       {error ? <Notice kind="refusal">{describeError(error)}</Notice> : null}
       <View style={styles.buttons}>
         <Button label={t('edit.save')} size="small" busy={changing.isPending} onPress={save} />
@@ -97,7 +133,6 @@ function StationEditor({ editor, station, onClose }: { editor: StationsEditor; s
         )}
         <Button label={t('edit.done')} size="small" variant="quiet" onPress={onClose} />
       </View>
-      {fixed ? <Notice kind="plain">{t('edit.fixed')}</Notice> : null}
     </View>
   );
 }

@@ -42,14 +42,22 @@ let mockBundle: RoundBundle = morningBundle();
 
 jest.mock('expo-router', () => ({ Link: ({ children }: { children: unknown }) => children }));
 jest.mock('@/hooks/outbox/use-outbox', () => ({ useOutbox: () => ({ kept: [], sending: false }) }));
-jest.mock('@/hooks/round/use-round', () => ({ useRound: () => mockUseRound() }));
+jest.mock('@/hooks/round/use-round', () => ({ useRound: () => mockHooks.useRound() }));
 jest.mock('@/hooks/round/use-recorder', () => ({ useRecorder: () => mockRecorder() }));
 
-function mockUseRound(): RoundView {
-  const records = mockUseRecords();
-  const state = foldRound(records, { ...mockBundle, surface: mockBundle.round.surface });
-  return { status: 'ready', bundle: mockBundle, state, error: null, seen: 0, tryAgain: () => undefined };
-}
+const mockHooks = {
+  useRound: function useRound(): RoundView {
+    const records = useSyncExternalStore(
+      (listener) => {
+        mockDisk.listeners.add(listener);
+        return () => void mockDisk.listeners.delete(listener);
+      },
+      () => mockDisk.records,
+    );
+    const state = foldRound(records, { ...mockBundle, surface: mockBundle.round.surface });
+    return { status: 'ready', bundle: mockBundle, state, error: null, seen: 0, tryAgain: () => undefined };
+  },
+};
 
 function mockRecorder(): Recorder {
   return {
@@ -67,15 +75,6 @@ function mockRecorder(): Recorder {
   };
 }
 
-function mockUseRecords() {
-  return useSyncExternalStore(
-    (listener) => {
-      mockDisk.listeners.add(listener);
-      return () => void mockDisk.listeners.delete(listener);
-    },
-    () => mockDisk.records,
-  );
-}
 function mockKeepOne(draft: RecordDraft) {
   mockDisk.keep([draft]);
   return draft.id;

@@ -84,7 +84,7 @@ test('a station is named; one that has been shot stays, and says so', async () =
   const { person, state } = await open(withStations(footingOf({ runs: L_RUNS, outlineVersion: 1 }), 8 * FOOT));
   await person.click(screen.getByLabelText(/^0\+14\.7,/));
   await fill(person, screen.getByLabelText('Name of 0+14.7'), 'Pilaster');
-  await person.click(screen.getByText('Save the name'));
+  await person.click(screen.getByText('Save'));
   expect(await screen.findByText('Pilaster')).toBeInTheDocument();
   await person.click(screen.getByLabelText(/^0\+07\.3,/));
   await person.click(screen.getByText('Remove 0+07.3'));
