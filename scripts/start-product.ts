@@ -55,6 +55,7 @@ async function startServer(
   root: string,
   database: StartDatabase,
   webFolder: string,
+  wanted: number,
 ): Promise<ServerProcess & { address: string }> {
   const data = dataFolder(root);
   const port = await freePortFrom(wanted);
@@ -94,9 +95,11 @@ export async function startProduct(root: string, began: number): Promise<Running
   try {
     await step('Bringing the database up to date', () => migrate(root, database.ownerUrl));
     const said = await step('Looking whether the demo is there', () => seedDemo(root, database.url));
+    // At once: what the demo says it says only the first time.
+    const signIns = keptSignIns(join(dataFolder(root), 'demo-sign-ins.txt'), said);
     const webFolder = await ensureWebApp(root);
     const server = await startServer(root, database, webFolder, wanted);
-    sayReady(root, server.address, keptSignIns(join(dataFolder(root), 'demo-sign-ins.txt'), said), began);
+    sayReady(root, server.address, signIns, began);
     return {
       address: server.address,
       ended: server.ended.then((code) => {
