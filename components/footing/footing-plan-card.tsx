@@ -19,7 +19,7 @@ export function FootingPlanCard({ footing }: { footing: Footing }) {
     <Card title={t('plan.title')} note={drawn ? t('plan.stations', { count: footing.stations.length }) : undefined}>
       {drawn ? <Plan footing={footing} /> : <Body tone="ink2">{t('plan.none')}</Body>}
       <FieldPair>
-        {mayDraw || drawn ? (
+        {drawn ? (
           <Button
             label={mayDraw ? t('plan.outline') : t('plan.seeOutline')}
             variant="plain"

@@ -104,7 +104,9 @@ function NextButton({ step, footingId, rounds }: { step: NextStep; footingId: st
         />
       );
     case 'go-on':
-      return <Button {...look} label={t('button.goOn')} href={roundInHand(step.round)} />;
+      return (
+        <Button {...look} label={step.round.shot === 0 ? t('button.setUp') : t('button.goOn')} href={roundInHand(step.round)} />
+      );
     case 'see-results':
       return (
         <Button

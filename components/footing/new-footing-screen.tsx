@@ -115,10 +115,28 @@ function SizeFields({ control, style }: FieldsProps) {
         {...rules.planGrade}
       />
       <FieldPair>
-        <FormLengthField control={control} name="width" label={t('new.width')} {...rules.size} />
-        <FormLengthField control={control} name="thickness" label={t('new.thickness')} {...rules.size} />
+        <FormLengthField
+          control={control}
+          name="width"
+          label={t('new.width')}
+          hint={t(`new.widthHint.${style}`)}
+          {...rules.size}
+        />
+        <FormLengthField
+          control={control}
+          name="thickness"
+          label={t('new.thickness')}
+          hint={t(`new.thicknessHint.${style}`)}
+          {...rules.size}
+        />
       </FieldPair>
-      <FormLengthField control={control} name="wallThickness" label={t('new.wallThickness')} {...rules.size} />
+      <FormLengthField
+        control={control}
+        name="wallThickness"
+        label={t('new.wallThickness')}
+        hint={t(`new.thicknessHint.${style}`)}
+        {...rules.size}
+      />
       <FormChoice
         control={control}
         name="measuredOn"

@@ -23,7 +23,7 @@ export function BedRuleCard({ job }: { job: Job }) {
   const rule = job.bedRule;
   return (
     <Card title={t('jobs:bed.title')}>
-      <BedLines rule={rule} />
+      {open ? null : <BedLines rule={rule} />}
       {mayChange && !open ? (
         <Button
           variant="quiet"
@@ -31,6 +31,7 @@ export function BedRuleCard({ job }: { job: Job }) {
           label={t('common:action.edit')}
           spokenLabel={t('jobs:bed.change')}
           onPress={() => setOpen(true)}
+          style={{ alignSelf: 'flex-start' }}
         />
       ) : null}
       {open ? (

@@ -16,10 +16,10 @@ import { Body } from '@/components/ui/text';
 import { useAddJob } from '@/hooks/api/job-queries';
 import { useMay } from '@/hooks/session/use-session';
 import { USUAL_GRADUATION, type UnitStyle } from '@/shared/quantities';
-import { readyBedRule, readyToleranceRules, SURFACES, type WallType } from '@/shared/rules';
+import { readyBedRule, readyToleranceRules, SURFACES, type Surface, type WallType } from '@/shared/rules';
 import { BedFields } from './bed-fields';
 import { graduationOptions, styleOptions, wallOptions } from './graduation-options';
-import { bedDraft, readBed, readTolerances, toleranceDrafts, type BedForm, type RulesForm } from './rule-drafts';
+import { bedDraft, readBed, readTolerances, toleranceDrafts, withUnit, type BedForm, type RulesForm } from './rule-drafts';
 import { SurfaceRule } from './surface-rule';
 
 interface NewJobForm extends RulesForm, BedForm {
@@ -42,6 +42,9 @@ const blank: NewJobForm = {
   wallType: 'block',
   ...ready('feet-inches', 'block'),
 };
+
+const BED_LENGTHS = ['least', 'most', 'nominal', 'grindMost', 'courseHeight'] as const;
+type LengthName = `rules.${Surface}.${'low' | 'high'}` | `bed.${(typeof BED_LENGTHS)[number]}`;
 
 /** The server's paths of a job, and the form's names. */
 const paths = {
@@ -79,16 +82,19 @@ function useNewJob() {
       setRefusal(placeRefusals(error, form.setError, paths));
     }
   });
-  /** Fills in what is usual for the unit and wall; what the person has changed by hand stays. */
-  const fillIn = (unitStyle: UnitStyle, wallType: WallType) => {
+  /** Fills in what is usual for the unit and wall; what the person has changed by hand stays, with its unit written out. */
+  const fillIn = (unitStyle: UnitStyle, wallType: WallType, before: UnitStyle) => {
     const usual = ready(unitStyle, wallType);
     const { dirtyFields } = form.formState;
     form.resetField('graduation', { defaultValue: usual.graduation });
     for (const surface of SURFACES) {
       if (!dirtyFields.rules?.[surface]) form.resetField(`rules.${surface}`, { defaultValue: usual.rules[surface] });
+      else for (const limit of [`rules.${surface}.low`, `rules.${surface}.high`] as const) spellOut(limit, before);
     }
     if (!dirtyFields.bed) form.resetField('bed', { defaultValue: usual.bed });
+    else for (const part of BED_LENGTHS) spellOut(`bed.${part}`, before);
   };
+  const spellOut = (name: LengthName, before: UnitStyle) => form.setValue(name, withUnit(form.getValues(name), before));
   return { form, submit: () => void submit(), fillIn, refusal };
 }
 
@@ -122,7 +128,7 @@ function NewJob() {
                 label={t('new.unitStyle')}
                 layout="rows"
                 options={styleOptions()}
-                onChosen={(chosen) => fillIn(chosen, wall)}
+                onChosen={(chosen) => fillIn(chosen, wall, style)}
               />
               <FormChoice
                 control={control}
@@ -137,7 +143,7 @@ function NewJob() {
                 label={t('new.wallType')}
                 layout="rows"
                 options={wallOptions()}
-                onChosen={(chosen) => fillIn(style, chosen)}
+                onChosen={(chosen) => fillIn(style, chosen, style)}
               />
             </Column>
             <Column>

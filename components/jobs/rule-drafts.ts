@@ -1,3 +1,4 @@
+import { AnalysisError } from '@/analysis';
 import { printSmall } from '@/components/lengths/print-length';
 import { readLength, styleOfText } from '@/components/lengths/read-length';
 import { SURFACES, type BedRuleInput, type Surface, type ToleranceRuleInput } from '@/shared/rules';
@@ -40,6 +41,17 @@ export function toleranceDrafts(rules: Record<Surface, ToleranceRuleInput>): Rec
     wet: toleranceDraft(rules.wet),
     top: toleranceDraft(rules.top),
   };
+}
+
+/** What was keyed with its unit written out, so that it means the same when the job's unit changes; as it is where it does not read. */
+export function withUnit(text: string, style: UnitStyle): string {
+  try {
+    const rule = { style, sign: 'not-negative' } as const;
+    return printSmall(readLength(text, rule), styleOfText(text, rule));
+  } catch (error) {
+    if (error instanceof AnalysisError) return text;
+    throw error;
+  }
 }
 
 /** @throws AnalysisError of `readLength` */

@@ -5,6 +5,7 @@ import { space } from '@/constants/theme';
 import { toleranceWords } from '@/components/lengths/length-words';
 import { Button } from '@/components/ui/button';
 import { ListRow } from '@/components/ui/list-row';
+import { Figure } from '@/components/ui/text';
 import { useSetToleranceRule } from '@/hooks/api/job-queries';
 import { useMay } from '@/hooks/session/use-session';
 import type { Job } from '@/shared/api/job-endpoints';
@@ -34,19 +35,22 @@ export function ToleranceRuleRow({ job, surface, last }: RowProps) {
       <ListRow
         title={name}
         note={note.filter((part) => part !== null).join(' · ')}
-        end={toleranceWords(rule)}
-        last={last && !open && !mayChange}
+        end={
+          <View style={styles.end}>
+            <Figure>{toleranceWords(rule)}</Figure>
+            {mayChange && !open ? (
+              <Button
+                variant="quiet"
+                size="small"
+                label={t('common:action.edit')}
+                spokenLabel={t('jobs:rule.changeOf', { surface: name })}
+                onPress={() => setOpen(true)}
+              />
+            ) : null}
+          </View>
+        }
+        last={last || open}
       />
-      {mayChange && !open ? (
-        <Button
-          variant="quiet"
-          size="small"
-          label={t('common:action.edit')}
-          spokenLabel={t('jobs:rule.changeOf', { surface: name })}
-          onPress={() => setOpen(true)}
-          style={styles.change}
-        />
-      ) : null}
       {open ? <ToleranceEditor job={job} rule={rule} onClose={() => setOpen(false)} /> : null}
     </View>
   );
@@ -72,5 +76,12 @@ function ToleranceEditor({ job, rule, onClose }: { job: Job; rule: ToleranceRule
 
 const styles = StyleSheet.create({
   rule: { gap: space.s },
-  change: { alignSelf: 'flex-start', marginTop: -space.s },
+  end: {
+    flexDirection: 'row',
+    flexWrap: 'wrap',
+    alignItems: 'center',
+    justifyContent: 'flex-end',
+    columnGap: space.m,
+    flexShrink: 1,
+  },
 });

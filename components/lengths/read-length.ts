@@ -17,7 +17,8 @@ export interface LengthRule {
 const DECIMAL_FEET = /^[+\-−]? ?(\d+\.\d*|\.\d+) ?(['′’]|ft\.?|feet|foot)$/i;
 const BARE_DECIMAL = /^[+\-−]? ?(\d+\.\d*|\.\d+)$/;
 const METRIC = /\d ?(mm|cm|m)$/i;
-const FEET_INCHES = /['′’"″”]|\d ?(ft|feet|foot|in|inch|inches)\b/i;
+/** A fraction says inches as plainly as a mark does. */
+const FEET_INCHES = /['′’"″”]|\d ?(ft|feet|foot|in|inch|inches)\b|\d ?[/⁄∕] ?\d|[½¼¾⅛⅜⅝⅞]/i;
 
 /** The style that the text says by its own marks; the field's where it says none. */
 export function styleOfText(text: string, { style, bareDecimal }: LengthRule): LengthStyle {

@@ -33,7 +33,7 @@ export function waitingWords(waiting: Waiting): WaitingWords {
   return {
     title: i18n.t(`today:waiting.${what}.title`, { footing: waiting.footingName ?? '' }),
     note: [place, counted ?? i18n.t(`today:waiting.${what}.note`)].filter((part) => part !== null && part !== '').join(' · '),
-    button: i18n.t(`today:waiting.${what}.button`),
+    button: what === 'finish-round' && shot === 0 ? i18n.t('today:setUp') : i18n.t(`today:waiting.${what}.button`),
     href: hrefOf(waiting),
   };
 }

@@ -78,7 +78,8 @@ export function TextField({ label, hint, error, end, figures, hideLabel, disable
           {...input}
           {...web}
           ref={keep}
-          aria-label={hideLabel ? label : undefined}
+          // Beside the visible label too: where that is scrolled away, checkers that look at the glass still find a name.
+          aria-label={label}
           aria-labelledby={hideLabel ? undefined : `${id}-label`}
           aria-disabled={disabled}
           editable={!disabled}
