@@ -113,7 +113,7 @@ const styles = StyleSheet.create({
   body: { flex: 1, minWidth: 0, minHeight: 0 },
   tabs: { flexDirection: 'row', borderTopWidth: 1 },
   tab: { flex: 1, minHeight: 62, alignItems: 'center', justifyContent: 'center', borderTopWidth: 3, marginTop: -1 },
-  rail: { width: 190, borderRightWidth: 1, paddingHorizontal: space.m + 2, paddingBottom: space.xl },
+  rail: { width: 190, borderRightWidth: 1, paddingTop: space.s, paddingHorizontal: space.m + 2, paddingBottom: space.xl },
   links: { flex: 1, paddingTop: space.xl, gap: 2 },
   link: {
     minHeight: target.least,
