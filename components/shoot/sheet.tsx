@@ -38,7 +38,9 @@ export function Sheet({ title, children, actions, onClose }: SheetProps) {
 const styles = StyleSheet.create({
   over: { flex: 1, justifyContent: 'flex-end', alignItems: 'center' },
   behind: { position: 'absolute', inset: 0, opacity: 0.45 },
+  // Over what lies behind it, which stands out of the flow.
   sheet: {
+    zIndex: 1,
     width: '100%',
     maxWidth: 560,
     maxHeight: '90%',

@@ -9,7 +9,7 @@ import { Choice } from '@/components/ui/choice';
 import { Notice } from '@/components/ui/notice';
 import { space } from '@/constants/theme';
 import type { RoundTarget } from '@/shared/round/round-state';
-import { deviationWords, earlierWords } from './earlier-words';
+import { earlierWords } from './earlier-words';
 import { EntryPanel } from './entry-panel';
 import { JumpSheet } from './jump-sheet';
 import type { EntryRules } from './read-entry';
@@ -57,11 +57,8 @@ export function ShootingPanel({ shooting, target, rules }: ShootingPanelProps) {
       <StationBar
         place={place}
         gradeRod={gradeRodWords(shooting, rules)}
-        earlier={
-          moving && bundle.round.surface !== 'top'
-            ? t(`out.${bundle.round.surface}`, { deviation: deviationWords(outShot.deviation ?? 0, bundle.job) })
-            : earlierWords(target, shooting.lap, bundle.job)
-        }
+        earlier={earlierWords(target, shooting.lap, bundle.job)}
+        now={moving && bundle.round.surface !== 'top' ? t(`out.${bundle.round.surface}`) : null}
         onStep={shooting.step}
       />
       <VerdictCard

@@ -13,11 +13,13 @@ interface StationBarProps {
   gradeRod: string | null;
   /** What was shot here before: "before adjusting 1/4″ low". */
   earlier: string | null;
+  /** What to do before the next shot here, in place of both. */
+  now: string | null;
   onStep: (by: 1 | -1) => void;
 }
 
 /** Where the rod goes now and what it reads at grade, with the way to the stations beside it. */
-export function StationBar({ place, gradeRod, earlier, onStep }: StationBarProps) {
+export function StationBar({ place, gradeRod, earlier, now, onStep }: StationBarProps) {
   const { t } = useTranslation('shoot');
   return (
     <KeysRegion label={place} style={styles.row}>
@@ -28,14 +30,20 @@ export function StationBar({ place, gradeRod, earlier, onStep }: StationBarProps
         <Heading level={2} size="title" align="center">
           {place}
         </Heading>
-        <Body size="small" tone="ink2" align="center" numberOfLines={2}>
-          {gradeRod === null ? null : (
-            <>
-              {t('station.gradeRod')} <Strong>{gradeRod}</Strong>
-            </>
-          )}
-          {earlier === null ? null : `${gradeRod === null ? '' : ' · '}${earlier}`}
-        </Body>
+        {now === null ? (
+          <Body size={earlier === null ? 'small' : 'tiny'} tone="ink2" align="center" numberOfLines={2}>
+            {gradeRod === null ? null : (
+              <>
+                {t('station.gradeRod')} <Strong>{gradeRod}</Strong>
+              </>
+            )}
+            {earlier === null ? null : `${gradeRod === null ? '' : ' · '}${earlier}`}
+          </Body>
+        ) : (
+          <Body size="small" weight="bold" align="center">
+            {now}
+          </Body>
+        )}
       </View>
       <ShootKey label={t('station.next')} style={styles.key} onPress={() => onStep(1)}>
         <Icon name="chevron-right" />

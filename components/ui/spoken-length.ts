@@ -1,6 +1,7 @@
 import type { TFunction } from 'i18next';
 
-const primes = /^(−|-)?(?:(\d+)′)?\s*(?:(\d+)?\s*(?:(\d+)\/(\d+))?\s*″)?$/;
+// A whole number of inches is not followed by a stroke: 11/16 is no 1 and 1/16.
+const primes = /^(−|-)?(?:(\d+)′)?\s*(?:(\d+(?![\d/]))?\s*(?:(\d+)\/(\d+))?\s*″)?$/;
 
 /** A fraction of an inch as it is said: "3 sixteenths". Denominators 2 to 64, halving; another is said "3 over 10". */
 export function spokenFraction(numerator: number, denominator: number, t: TFunction<'common'>): string {
