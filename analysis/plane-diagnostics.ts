@@ -1,5 +1,6 @@
 import { type PlaneSolution, measureExtent } from './plane-solution';
 import { solveCarefully } from './plane-solve-careful';
+import type { QuickPlane } from './plane-solve-quick';
 import type { PlanePoint, PointFit } from './types';
 
 /** A point nearer than this to leverage 1 decides its own fitted value: nothing is left over to judge it by. */
@@ -76,38 +77,44 @@ export function carefulPointFits(points: readonly PlanePoint[], s: PlaneSolution
 }
 
 /**
- * The same of a quick solution, in one pass of plain arithmetic; null where a point comes so near leverage 1, or holds so much of the
- * whole sum, that digits would be lost.
+ * The same of a quick plane, in one pass of plain arithmetic; null where a point comes so near leverage 1, or holds so much of the whole
+ * sum, that digits would be lost.
  */
-export function quickPointFits(points: readonly PlanePoint[], s: PlaneSolution): PointFit[] | null {
-  const { p, q, residuals, totalWeight, sumPP, sumQQ, sumEE, rank } = s;
-  const df = points.length - rank;
-  const variance = sumEE / df;
-  const perPP = 1 / sumPP;
-  const perQQ = 1 / sumQQ;
-  const perWeight = 1 / totalWeight;
-  const fits: PointFit[] = [];
-  let i = 0;
-  for (const { id, z, weight = 1 } of points) {
-    const along = p[i] ?? 0;
-    const across = q[i] ?? 0;
-    const residual = residuals[i] ?? 0;
-    i += 1;
+export function quickPointFits(points: readonly PlanePoint[], plane: QuickPlane): PointFit[] | null {
+  const { first, mean, gradientX, gradientY, shear } = plane;
+  const byX = plane.pivot === 'x';
+  const df = points.length - 3;
+  const variance = plane.sumEE / df;
+  const perPP = 1 / plane.sumPP;
+  const perQQ = 1 / plane.sumQQ;
+  const perWeight = 1 / plane.totalWeight;
+  // Its length is known: growing it would copy it again and again.
+  const fits = new Array<PointFit>(points.length);
+  for (let i = 0; i < points.length; i += 1) {
+    const point = points[i];
+    if (point === undefined) break;
+    const x = point.x - first.x - mean.x;
+    const y = point.y - first.y - mean.y;
+    const residual = point.z - first.z - mean.z - gradientX * x - gradientY * y;
+    const along = byX ? x : y;
+    const across = (byX ? y : x) - shear * along;
+    const weight = point.weight ?? 1;
     const leverage = weight * (perWeight + along * along * perPP + across * across * perQQ);
     const left = 1 - leverage;
     const squared = (weight * residual * residual) / (variance * left);
     const remaining = df - squared;
     if (left < 1e-3 || (df > 1 && remaining < 1e-5 * df)) return null;
-    const studentized = Math.sign(residual) * Math.sqrt(squared);
-    fits.push({
-      id,
-      fitted: z - residual,
+    const size = Math.sqrt(squared);
+    const studentized = residual < 0 ? -size : size;
+    fits[i] = {
+      id: point.id,
+      fitted: point.z - residual,
       residual,
       leverage,
       studentized,
       deletedStudentized: df > 1 ? studentized * Math.sqrt((df - 1) / remaining) : null,
-      cooks: (squared * leverage) / (rank * left),
-    });
+      cooks: (squared * leverage) / (3 * left),
+    };
   }
   return fits;
 }

@@ -1,8 +1,7 @@
 import { inRange } from './check-input';
 import { huberRegression } from './huber-regression';
 import { EPS, LARGEST, corrected, measureExtent } from './plane-solution';
-import { solveCarefully } from './plane-solve-careful';
-import { solveQuickly } from './plane-solve-quick';
+import { solvePlane } from './plane-solve';
 import type { HuberPlane, PlanePoint } from './types';
 
 /** 95 % as efficient as least squares where the noise is normal (Huber 1981; from memory). */
@@ -19,7 +18,7 @@ const USUAL_K = 1.345;
  */
 export function fitPlaneHuber(points: readonly PlanePoint[], k: number = USUAL_K): HuberPlane {
   const extent = measureExtent(points);
-  const solution = solveQuickly(points, extent) ?? solveCarefully(points, extent);
+  const solution = solvePlane(points, extent);
   // In the orthogonal coordinates, about the mean, and about the least squares plane: nothing far off or nearly parallel is left to lose digits to.
   const columns = [solution.p, solution.q].slice(0, solution.rank - 1).map((column) => Array.from(column));
   const noise = Math.max(8 * EPS * extent.maxZ, 1 / LARGEST);

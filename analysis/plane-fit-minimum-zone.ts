@@ -1,8 +1,7 @@
 import { inRange } from './check-input';
 import { minimaxFit } from './minimax';
 import { corrected, measureExtent } from './plane-solution';
-import { solveCarefully } from './plane-solve-careful';
-import { solveQuickly } from './plane-solve-quick';
+import { solvePlane } from './plane-solve';
 import type { MinimumZonePlane, PlanePoint } from './types';
 
 const largest = (values: Float64Array): number => values.reduce((most, value) => Math.max(most, Math.abs(value)), 0);
@@ -18,7 +17,7 @@ const largest = (values: Float64Array): number => values.reduce((most, value) =>
  */
 export function fitPlaneMinimumZone(points: readonly PlanePoint[]): MinimumZonePlane {
   const extent = measureExtent(points);
-  const solution = solveQuickly(points, extent) ?? solveCarefully(points, extent);
+  const solution = solvePlane(points, extent);
   const { rank, p, q, residuals } = solution;
   const height = largest(residuals);
   const plane = corrected(solution, []);

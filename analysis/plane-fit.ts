@@ -1,7 +1,7 @@
 import { inRange } from './check-input';
 import { fUpperTail, studentTwoSided } from './distributions';
 import { carefulPointFits, quickPointFits } from './plane-diagnostics';
-import { type PlaneSolution, measureExtent } from './plane-solution';
+import { type PlaneShape, type PlaneSolution, measureExtent } from './plane-solution';
 import { solveCarefully } from './plane-solve-careful';
 import { solveQuickly } from './plane-solve-quick';
 import type { Coefficient, PlaneFit, PlanePoint, PointFit } from './types';
@@ -24,10 +24,11 @@ function azimuth(east: number, north: number): number {
 }
 
 /** Variance of the slope |∇z| by the delta method, s² = 1; the slope must not be zero unless the model is 'line'. */
-function slopeVariance(s: PlaneSolution, slope: number): number | null {
+function slopeVariance(s: PlaneShape, slope: number): number | null {
   if (s.model === 'level' || (s.model === 'plane' && slope === 0)) return null;
   if (s.model === 'line') return 1 / s.sumPP;
-  const [first, other] = s.pivot === 'x' ? [s.gradientX, s.gradientY] : [s.gradientY, s.gradientX];
+  const first = s.pivot === 'x' ? s.gradientX : s.gradientY;
+  const other = s.pivot === 'x' ? s.gradientY : s.gradientX;
   const alongP = first / slope;
   const alongQ = (other - s.shear * first) / slope;
   return (alongP * alongP) / s.sumPP + (alongQ * alongQ) / s.sumQQ;
@@ -45,7 +46,7 @@ function dropOver(s: PlaneSolution): number {
   return high - low;
 }
 
-function tiltOf(s: PlaneSolution, variance: number | null): PlaneFit['tilt'] {
+function tiltOf(s: PlaneShape, variance: number | null, drop: number): PlaneFit['tilt'] {
   const slope = inRange('slope', s.model === 'line' ? Math.abs(s.alongP) : Math.hypot(s.gradientX, s.gradientY));
   const unit = variance === null ? null : slopeVariance(s, slope);
   return {
@@ -53,7 +54,7 @@ function tiltOf(s: PlaneSolution, variance: number | null): PlaneFit['tilt'] {
     slopeStandardError:
       unit === null || variance === null ? null : inRange('standard error of the slope', Math.sqrt(unit * variance)),
     fallAzimuth: slope === 0 ? null : azimuth(-s.gradientX, -s.gradientY),
-    drop: inRange('drop', dropOver(s)),
+    drop: inRange('drop', drop),
   };
 }
 
@@ -63,14 +64,17 @@ function sharesOf(offset: number, tilt: number, rest: number): PlaneFit['shares'
   return total === 0 ? { offset: 0, tilt: 0, rest: 0 } : { offset: offset / total, tilt: tilt / total, rest: rest / total };
 }
 
-function slopes(s: PlaneSolution, variance: number | null, df: number): Pick<PlaneFit, 'a' | 'b' | 'c'> {
+function times(unit: number, variance: number | null): number | null {
+  return variance === null ? null : unit * variance;
+}
+
+function slopes(s: PlaneShape, variance: number | null, df: number): Pick<PlaneFit, 'a' | 'b' | 'c'> {
   const at = 1 / s.totalWeight;
-  if (s.model !== 'plane') return { a: coefficient(s.meanZ, variance === null ? null : variance * at, df), b: null, c: null };
+  if (s.model !== 'plane') return { a: coefficient(s.meanZ, times(at, variance), df), b: null, c: null };
   const meanP = s.pivot === 'x' ? s.meanX : s.meanY;
-  const scaled = (unit: number): number | null => (variance === null ? null : unit * variance);
-  const first = scaled(1 / s.sumPP + (s.shear * s.shear) / s.sumQQ);
-  const other = scaled(1 / s.sumQQ);
-  const origin = scaled(at + (meanP * meanP) / s.sumPP + (s.originAcross * s.originAcross) / s.sumQQ);
+  const first = times(1 / s.sumPP + (s.shear * s.shear) / s.sumQQ, variance);
+  const other = times(1 / s.sumQQ, variance);
+  const origin = times(at + (meanP * meanP) / s.sumPP + (s.originAcross * s.originAcross) / s.sumQQ, variance);
   return {
     a: coefficient(s.atOrigin, origin, df),
     b: coefficient(s.gradientX, s.pivot === 'x' ? first : other, df),
@@ -78,29 +82,32 @@ function slopes(s: PlaneSolution, variance: number | null, df: number): Pick<Pla
   };
 }
 
-function fTestOf(s: PlaneSolution, sumTilt: number, df: number): PlaneFit['fTest'] {
+function fTestOf(s: PlaneShape, sumTilt: number, df: number): PlaneFit['fTest'] {
   if (s.model === 'level' || df < 1 || s.sumEE === 0) return null;
   const df1 = s.model === 'plane' ? 2 : 1;
   const f = inRange('F', sumTilt / df1 / (s.sumEE / df));
   return { f, df1, df2: df, p: fUpperTail(f, df1, df) };
 }
 
-function assemble(points: readonly PlanePoint[], s: PlaneSolution, fits: PointFit[]): PlaneFit {
-  const n = points.length;
+function assemble(s: PlaneShape, fits: PointFit[], drop: number): PlaneFit {
+  const n = fits.length;
   const df = n - s.rank;
   const variance = df < 1 ? null : s.sumEE / df;
   const sumTilt = s.alongP * s.alongP * s.sumPP + s.alongQ * s.alongQ * s.sumQQ;
   const sumOffset = s.totalWeight * s.meanZ * s.meanZ;
   const about = sumTilt + s.sumEE;
+  const { a, b, c } = slopes(s, variance, df);
   return {
     model: s.model,
     n,
     df,
-    ...slopes(s, variance, df),
+    a,
+    b,
+    c,
     residualStandardError: variance === null ? null : inRange('residual standard error', Math.sqrt(variance)),
     rSquared: about === 0 ? null : sumTilt / about,
     fTest: fTestOf(s, sumTilt, df),
-    tilt: tiltOf(s, variance),
+    tilt: tiltOf(s, variance, drop),
     shares: sharesOf(sumOffset, sumTilt, s.sumEE),
     points: fits,
   };
@@ -126,7 +133,7 @@ export function fitPlane(points: readonly PlanePoint[]): PlaneFit {
   const extent = measureExtent(points);
   const quick = solveQuickly(points, extent);
   const fits = quick === null ? null : quickPointFits(points, quick);
-  if (quick !== null && fits !== null) return assemble(points, quick, fits);
+  if (quick !== null && fits !== null) return assemble(quick, fits, quick.drop);
   const careful = solveCarefully(points, extent);
-  return assemble(points, careful, carefulPointFits(points, careful));
+  return assemble(careful, carefulPointFits(points, careful), dropOver(careful));
 }

@@ -8,8 +8,8 @@ export const EPS = Number.EPSILON;
 /** Beyond this nothing is a length, an elevation or a weight in any unit, and squares of squares would leave the range of doubles. */
 export const LARGEST = 1e60;
 
-/** What a fit knows before its diagnostics: gradient, the two orthogonal plan coordinates about the weighted mean, residuals. */
-export interface PlaneSolution {
+/** What a fit knows of the whole: its gradient, and the two orthogonal plan directions about the weighted mean that it was found in. */
+export interface PlaneShape {
   model: 'plane' | 'line' | 'level';
   /** Fitted parameters. */
   rank: 1 | 2 | 3;
@@ -27,21 +27,27 @@ export interface PlaneSolution {
   /** Unit vector of p in the plan: east or north by the pivot, along the points for 'line'. */
   directionX: number;
   directionY: number;
-  /** First coordinate of each point, about the weighted mean; zero for 'level'. */
-  p: Float64Array;
+  /** Rise of z along p, and Σwp². */
   alongP: number;
   sumPP: number;
-  /** What the other coordinate has across the first: q = other − shear·p; zero unless 'plane'. */
-  q: Float64Array;
+  /** Rise along q = other − shear·p, what the other coordinate has across the first, and Σwq²; zero unless 'plane'. */
   alongQ: number;
   sumQQ: number;
   shear: number;
   /** Mean of the other coordinate less shear · mean of the first: how far across p the origin lies. */
   originAcross: number;
-  /** z − fitted; all exactly zero where they are no more than rounding noise. */
-  residuals: Float64Array;
   /** Σw·residual². */
   sumEE: number;
+}
+
+/** The same with what each point gives. */
+export interface PlaneSolution extends PlaneShape {
+  /** First coordinate of each point, about the weighted mean; zero for 'level'. */
+  p: Float64Array;
+  /** Second coordinate; zero unless 'plane'. */
+  q: Float64Array;
+  /** z − fitted; all exactly zero where they are no more than rounding noise. */
+  residuals: Float64Array;
   /** Residuals up to this are rounding noise of the elevations given. */
   noise: number;
 }
@@ -90,7 +96,7 @@ export function measureExtent(points: readonly PlanePoint[]): Extent {
 }
 
 /** Rise to the east and to the north of what rises by so much along p and along q. */
-export function gradientOf(s: PlaneSolution, alongP: number, alongQ: number): { x: number; y: number } {
+export function gradientOf(s: PlaneShape, alongP: number, alongQ: number): { x: number; y: number } {
   const first = alongP - s.shear * alongQ;
   const across = s.pivot === 'x' ? { x: 0, y: alongQ } : { x: alongQ, y: 0 };
   return { x: first * s.directionX + across.x, y: first * s.directionY + across.y };

@@ -1,7 +1,6 @@
 import { studentUpperQuantile } from './distributions';
 import { EPS, type PlaneSolution, measureExtent } from './plane-solution';
-import { solveCarefully } from './plane-solve-careful';
-import { solveQuickly } from './plane-solve-quick';
+import { solvePlane } from './plane-solve';
 import type { PlanePoint } from './types';
 import type { Nm } from './units';
 
@@ -20,10 +19,7 @@ export interface PlaneSearch {
   expected: Expected;
 }
 
-const solve = (points: readonly PlanePoint[]): PlaneSolution => {
-  const extent = measureExtent(points);
-  return solveQuickly(points, extent) ?? solveCarefully(points, extent);
-};
+const solve = (points: readonly PlanePoint[]): PlaneSolution => solvePlane(points, measureExtent(points));
 
 /** The points that are still in, in the orthogonal plan coordinates of the last full solution. */
 interface Remaining {
