@@ -43,7 +43,7 @@ export function AnswersCard({ bundle, state, results }: AnswersCardProps) {
   const { wall } = results;
   return (
     <Card weight="heavy" flush>
-      <View style={wide && wall ? styles.beside : null}>
+      <View role="region" aria-label={t('answers')} style={wide && wall ? styles.beside : null}>
         {wall ? (
           <View
             style={[

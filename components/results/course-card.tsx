@@ -5,7 +5,7 @@ import { StyleSheet, View } from 'react-native';
 import { Button } from '@/components/ui/button';
 import { Card } from '@/components/ui/card';
 import { Choice } from '@/components/ui/choice';
-import { Body, Figure, Label } from '@/components/ui/text';
+import { Body } from '@/components/ui/text';
 import { space } from '@/constants/theme';
 import type { RoundBundle } from '@/shared/api/round-endpoints';
 import { courseAt } from '@/shared/round/course-at';
@@ -13,6 +13,7 @@ import type { WallResult } from '@/shared/round/round-results';
 import { LengthField, lengthRefusal } from '../lengths/length-field';
 import { printSmall } from '../lengths/print-length';
 import { readLength } from '../lengths/read-length';
+import { FigureRow } from './figure-row';
 import { groupGrade, heightWords, rangeWords, grindLengthWords, toMark, volumeWords, windowInMarks } from './results-words';
 
 interface CourseCardProps {
@@ -54,12 +55,7 @@ export function CourseCard({ bundle, wall, group }: CourseCardProps) {
       }
       note={heightWords(height, bundle)}
     >
-      <View style={styles.row}>
-        <Label>{t('course.bottom')}</Label>
-        <Figure size="head" weight="bold">
-          {formatLength(grade + height, job.unitStyle, job.graduation)}
-        </Figure>
-      </View>
+      <FigureRow large label={t('course.bottom')} value={formatLength(grade + height, job.unitStyle, job.graduation)} />
       <View style={styles.stepper}>
         <Button label={`− ${step}`} spokenLabel={t('course.lower', { step })} onPress={() => choose(height - job.graduation)} />
         <LengthField
@@ -87,8 +83,8 @@ export function CourseCard({ bundle, wall, group }: CourseCardProps) {
           if (kind !== 'own') choose(optionHeight(kind));
         }}
       />
-      <Row label={t(`course.bed.${bedRule.material}`)} value={volumeWords(course.bedVolume, bundle)} />
-      <Row
+      <FigureRow label={t(`course.bed.${bedRule.material}`)} value={volumeWords(course.bedVolume, bundle)} />
+      <FigureRow
         label={t('course.grinding')}
         value={
           course.grindLength > 0
@@ -99,8 +95,8 @@ export function CourseCard({ bundle, wall, group }: CourseCardProps) {
             : t('course.noGrinding')
         }
       />
-      <Row label={t('course.thinnest')} value={bedWords(course.leastBed)} />
-      <Row label={t('course.thickest')} value={bedWords(course.mostBed)} />
+      <FigureRow label={t('course.thinnest')} value={bedWords(course.leastBed)} />
+      <FigureRow label={t('course.thickest')} value={bedWords(course.mostBed)} />
     </Card>
   );
 
@@ -111,18 +107,7 @@ export function CourseCard({ bundle, wall, group }: CourseCardProps) {
   }
 }
 
-function Row({ label, value }: { label: string; value: string }) {
-  return (
-    <View style={styles.row}>
-      <Body style={styles.label}>{label}</Body>
-      <Figure align="right">{value}</Figure>
-    </View>
-  );
-}
-
 const styles = StyleSheet.create({
-  row: { flexDirection: 'row', alignItems: 'baseline', justifyContent: 'space-between', flexWrap: 'wrap', columnGap: space.m },
-  label: { flexShrink: 1 },
   stepper: { flexDirection: 'row', alignItems: 'flex-end', gap: space.s },
   field: { flexGrow: 1, flexShrink: 1, flexBasis: 90, minWidth: 0 },
 });

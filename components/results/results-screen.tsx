@@ -129,11 +129,11 @@ function Findings({ bundle, state, mayShoot }: ResultsProps & { mayShoot: boolea
             <Columns>
               <Column>
                 {plan}
-                {suspects}
+                {course}
               </Column>
               <Column>
                 {shape}
-                {course}
+                {suspects}
                 {straightedge}
               </Column>
             </Columns>
@@ -186,7 +186,6 @@ function Plan({ bundle, state, results, closed }: PictureProps & { closed: boole
   const { t } = useTranslation('results');
   const { shape } = results;
   const toward = shape ? fallWords(bundle, state, shape) : null;
-  const setup = state.series.at(-1)?.setup;
   return (
     <Card title={t('plan.title')}>
       <PlanView
@@ -194,7 +193,6 @@ function Plan({ bundle, state, results, closed }: PictureProps & { closed: boole
         closed={closed}
         width={bundle.footing.width}
         stations={planStations(bundle, state, results)}
-        laser={setup?.stand ?? null}
         tilt={
           shape && toward && shape.fallAzimuth !== null
             ? {

@@ -1,12 +1,13 @@
 import { useTranslation } from 'react-i18next';
 import { StyleSheet, View } from 'react-native';
 import { Card } from '@/components/ui/card';
-import { Body, Figure, Label } from '@/components/ui/text';
+import { Body, Label } from '@/components/ui/text';
 import { radius, space, type Tokens } from '@/constants/theme';
 import { useTokens } from '@/hooks/use-tokens';
 import type { RoundBundle } from '@/shared/api/round-endpoints';
 import type { Shape } from '@/shared/round/round-results';
 import type { RoundState } from '@/shared/round/round-state';
+import { FigureRow } from './figure-row';
 import { offGradeWords } from '../lengths/length-words';
 import { printSmall } from '../lengths/print-length';
 import { fallWords, distanceWords, tiltWords, toMark } from './results-words';
@@ -27,9 +28,9 @@ export function ShapeCard({ bundle, state, shape }: ShapeCardProps) {
   return (
     <Card title={t(state.out > 0 ? 'shape.title' : 'shape.titleGood')}>
       <SharesBar shape={shape} />
-      <Row label={t('shape.whole')} value={offGradeWords(mark(shape.offset), unitStyle)} />
+      <FigureRow label={t('shape.whole')} value={offGradeWords(mark(shape.offset), unitStyle)} />
       {shape.fit.model === 'level' ? null : (
-        <Row
+        <FigureRow
           label={toward ? t('shape.falls', { toward }) : t('shape.level')}
           value={
             toward
@@ -38,21 +39,12 @@ export function ShapeCard({ bundle, state, shape }: ShapeCardProps) {
           }
         />
       )}
-      <Row
+      <FigureRow
         label={t('shape.rest')}
         value={rest === 0 ? t('shape.none') : t('shape.upTo', { size: printSmall(rest, unitStyle) })}
       />
       <Body>{tiltWords(bundle, state, shape)}</Body>
     </Card>
-  );
-}
-
-function Row({ label, value }: { label: string; value: string }) {
-  return (
-    <View style={styles.row}>
-      <Body style={styles.label}>{label}</Body>
-      <Figure align="right">{value}</Figure>
-    </View>
   );
 }
 
@@ -81,8 +73,6 @@ function SharesBar({ shape }: { shape: Shape }) {
 }
 
 const styles = StyleSheet.create({
-  row: { flexDirection: 'row', alignItems: 'baseline', justifyContent: 'space-between', columnGap: space.m, paddingVertical: 2 },
-  label: { flexShrink: 1 },
   bar: { flexDirection: 'row', height: 30, borderRadius: radius.key - 2, overflow: 'hidden', marginBottom: space.xs },
   part: { flexBasis: 0, minWidth: 0, alignItems: 'center', justifyContent: 'center', overflow: 'hidden' },
 });
