@@ -57,7 +57,10 @@ export function offsetOutline(runs: OutlineRun[], outward: Nm): OutlineRun[] {
       throw new AnalysisError('offset-swallows-run', `Nothing is left of ${run.id} there.`, { run: run.id, length });
     }
     if (!run.steps) return { ...run, length };
-    const steps = run.steps.map((step) => ({ ...step, at: movedStep(run, step.at, atStart, length) }));
+    const steps = run.steps.map(({ at, by: rise }) => ({
+      at: movedStep(run, at, atStart, length),
+      by: nanometres(`step of ${run.id}`, rise),
+    }));
     return { ...run, length, steps };
   });
 }

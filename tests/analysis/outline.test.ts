@@ -297,6 +297,15 @@ describe('offsets between wall face, footing face and centre line', () => {
         ),
       'offset-swallows-step',
     ],
+    [
+      'a step of no height at all',
+      () =>
+        offsetOutline(
+          RECTANGLE.map((run) => ({ ...run, steps: [{ at: 0, by: Number.NaN }] })),
+          FOOT,
+        ),
+      'not-finite',
+    ],
     ['a fold', () => offsetOutline(walk([10, 180], [5, 180]), 1), 'turn-folds-back'],
     [
       'a wall without width',
