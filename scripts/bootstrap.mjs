@@ -91,15 +91,11 @@ async function ensureNpmPackages(root) {
   if (existsSync(stamp) && readFileSync(stamp, 'utf8') === hash) return;
   // A person who ran npm install by hand has what the lock asks for: taking that away to lay it again helps nobody.
   if (!existsSync(installed) || !installMatchesLock(readJson(lockFile), readJson(installed))) {
-    await step(
-      'Installing npm packages (one to three minutes the first time)',
-      async () => {
-        const args = ['ci', '--include=dev', '--no-audit', '--no-fund'];
-        const { code } = await run('npm', args, { cwd: root, show: true });
-        if (code !== 0) throw new Stop('npm ci did not finish: what it said is above. Nothing else was started.');
-      },
-      { silent: false },
-    );
+    await step('Installing npm packages (one to three minutes the first time)', async () => {
+      const args = ['ci', '--include=dev', '--no-audit', '--no-fund', '--no-update-notifier'];
+      const { code } = await run('npm', args, { cwd: root, show: true });
+      if (code !== 0) throw new Stop('npm ci did not finish: what it said is above. Nothing else was started.');
+    });
   }
   writeFileSync(stamp, hash);
 }
@@ -108,7 +104,7 @@ async function haveFreeSudo() {
   try {
     return (await run('sudo', ['-n', 'true'])).code === 0;
   } catch (error) {
-    if (codeOf(error) === 'ENOENT') return false;
+    if (['ENOENT', 'EACCES'].includes(codeOf(error) ?? '')) return false;
     throw error;
   }
 }
