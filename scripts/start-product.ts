@@ -94,7 +94,7 @@ export async function startProduct(root: string, began: number): Promise<Running
   const database = await startDatabase(root);
   try {
     await step('Bringing the database up to date', () => migrate(root, database.ownerUrl));
-    const said = await step('Looking whether the demo is there', () => seedDemo(root, database.url));
+    const said = await step('Laying the demo if the database is empty', () => seedDemo(root, database.url));
     // At once: what the demo says it says only the first time.
     const signIns = keptSignIns(join(dataFolder(root), 'demo-sign-ins.txt'), said);
     const webFolder = await ensureWebApp(root);

@@ -88,6 +88,11 @@ async function exportWebApp(root: string, dist: string, name: string): Promise<v
   await precompress(partial);
   // One name a content: an export in use is never written to, and a half-made one never has a name that is served.
   const target = join(dist, name);
+  if (existsSync(join(target, 'index.html'))) {
+    // Another run finished the same content meanwhile, and may be serving it.
+    rmSync(partial, { recursive: true });
+    return;
+  }
   rmSync(target, { recursive: true, force: true });
   renameSync(partial, target);
 }
