@@ -46,7 +46,7 @@ export function DigitKeys({ entry, onKey }: { entry: ReadingEntry; onKey: (actio
 }
 
 const styles = StyleSheet.create({
-  grid: { gap: 6 },
+  grid: { gap: 4 },
   row: { flexDirection: 'row', gap: 6 },
   key: { minHeight: 60 },
 });

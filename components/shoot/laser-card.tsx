@@ -14,13 +14,15 @@ interface LaserCardProps {
   job: RoundBundle['job'];
   /** Absent: whoever looks on reads no benchmark. */
   onCheck?: () => void;
+  /** The benchmark is being read: a first miss asks to read again before anything is called doubted. */
+  checking?: boolean;
 }
 
 /** The height of instrument that elevations come from, and whether the laser stood still under it. */
-export function LaserCard({ series, job, onCheck }: LaserCardProps) {
+export function LaserCard({ series, job, onCheck, checking = false }: LaserCardProps) {
   const tokens = useTokens();
   const { t } = useTranslation('shoot');
-  const doubted = series.checks.some((check) => check.of === 'laser' && !check.holds);
+  const doubted = !checking && series.checks.some((check) => check.of === 'laser' && !check.holds);
   return (
     <View
       style={[
@@ -34,7 +36,7 @@ export function LaserCard({ series, job, onCheck }: LaserCardProps) {
           <Figure weight="bold">{series.hi === null ? '–' : formatLength(series.hi, job.unitStyle, job.graduation)}</Figure>
         </Body>
         <View role="status">
-          <Body size="small">{laserWords(series)}</Body>
+          <Body size="small">{checking ? t('laser.checking') : laserWords(series)}</Body>
         </View>
       </View>
       {onCheck ? <Button label={t('check.button')} size="normal" onPress={onCheck} /> : null}

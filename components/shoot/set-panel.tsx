@@ -42,7 +42,8 @@ export function SetPanel({ gradeRod, laser, style, receiver, onReceiver }: SetPa
 }
 
 const styles = StyleSheet.create({
-  panel: { gap: space.m },
+  // As high as the keys, so that Record stays under the thumb.
+  panel: { gap: space.m, minHeight: 300 },
   rod: {
     minHeight: 58,
     borderWidth: 2,

@@ -29,9 +29,14 @@ export function ShootBody({ roundId, view, at }: { roundId: string; view: ReadyR
   const mark = backsightMark(view, series);
   const laser =
     series && series.hi !== null ? (
-      <LaserCard series={series} job={view.bundle.job} onCheck={mark && !checking ? () => setChecking(true) : undefined} />
+      <LaserCard
+        series={series}
+        job={view.bundle.job}
+        checking={checking}
+        onCheck={mark && !checking ? () => setChecking(true) : undefined}
+      />
     ) : null;
-  const strip = <RoundStrip view={view} target={checking ? null : target} verdict={shooting.verdict} height={wide ? 170 : 84} />;
+  const strip = <RoundStrip view={view} target={checking ? null : target} verdict={shooting.verdict} height={wide ? 170 : 74} />;
   const work = <Work shooting={shooting} checking={checking} onCheck={setChecking} />;
   if (!wide) {
     return (

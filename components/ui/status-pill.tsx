@@ -39,7 +39,8 @@ export function StatusPill({ state, count = 0, onPress }: StatusPillProps) {
   );
   if (!onPress) return pill;
   return (
-    <Pressable role="button" onPress={onPress} style={styles.press}>
+    // A status inside gives a button no name, so it says its own.
+    <Pressable role="button" aria-label={label} onPress={onPress} style={styles.press}>
       {pill}
     </Pressable>
   );
