@@ -24,7 +24,7 @@ export function outlineCloses(footing: Pick<Footing, 'runs'>, graduation: Nm): b
  * Which stages of a footing are behind it, from its outline and its rounds; nothing of this is stored.
  *
  * Outline: closes, or is a strip, and has stations. Dig: not needed, or every station of it shot. Rails: one whole lap by reading after the last
- * adjustment, each deciding shot with the laser held. Top: every station shot. Of several rounds of one surface the newest
+ * adjustment, each deciding shot within tolerance and with the laser held. Top: every station shot. Of several rounds of one surface the newest
  * that has a shot counts. Release and course come with the people who give them: neither is behind before it can be given.
  *
  * @param rounds oldest first
@@ -44,7 +44,7 @@ export function deriveStages(
   const isDone: Record<Stage, boolean> = {
     outline: footing.stations.length > 0 && outlineCloses(footing, graduation),
     dig: !footing.digNeeded || allShot('dig'),
-    rails: rails !== undefined && rails.wholeReadLap && rails.targets.every(({ deciding }) => deciding?.laser === 'held'),
+    rails: rails !== undefined && rails.wholeReadLap && rails.targets.every(({ deciding }) => deciding?.laser === 'held' && deciding.verdict === 'in'),
     release: false,
     top: allShot('top'),
     course: false,
