@@ -44,7 +44,10 @@ export function deriveStages(
   const isDone: Record<Stage, boolean> = {
     outline: footing.stations.length > 0 && outlineCloses(footing, graduation),
     dig: !footing.digNeeded || allShot('dig'),
-    rails: rails !== undefined && rails.wholeReadLap && rails.targets.every(({ deciding }) => deciding?.laser === 'held' && deciding.verdict === 'in'),
+    rails:
+      rails !== undefined &&
+      rails.wholeReadLap &&
+      rails.targets.every(({ deciding }) => deciding?.laser === 'held' && deciding.verdict === 'in'),
     release: false,
     top: allShot('top'),
     course: false,
