@@ -4,6 +4,7 @@ import { printRound, printSmall } from '@/components/lengths/print-length';
 import { Loaded } from '@/components/query/loaded';
 import { Button } from '@/components/ui/button';
 import { Card } from '@/components/ui/card';
+import { Column, Columns } from '@/components/ui/columns';
 import { EmptyState } from '@/components/ui/empty-state';
 import { ListRow } from '@/components/ui/list-row';
 import { Screen } from '@/components/ui/screen';
@@ -36,10 +37,14 @@ export function LasersScreen() {
     <Screen title={t('title')} large actions={mayWrite && complete ? both : undefined}>
       <Loaded query={query} loading={t('loading')}>
         {({ lasers, rods }) => (
-          <>
-            <Lasers lasers={lasers} add={mayWrite ? addLaser : undefined} />
-            <Rods rods={rods} add={mayWrite ? addRod : undefined} />
-          </>
+          <Columns>
+            <Column share={2}>
+              <Lasers lasers={lasers} add={mayWrite ? addLaser : undefined} />
+            </Column>
+            <Column>
+              <Rods rods={rods} add={mayWrite ? addRod : undefined} />
+            </Column>
+          </Columns>
         )}
       </Loaded>
     </Screen>

@@ -8,7 +8,7 @@ import { Screen } from '@/components/ui/screen';
 export function MissingScreen() {
   const { t } = useTranslation('common');
   return (
-    <Screen title={t('missing.title')} large brand={<Brand />} maxWidth={640}>
+    <Screen title={t('missing.title')} large brand={<Brand />} withoutRail maxWidth={640}>
       <EmptyState title={t('missing.what')} action={<Button variant="primary" size="large" label={t('missing.home')} href="/" />}>
         {t('missing.how')}
       </EmptyState>

@@ -36,7 +36,7 @@ export function SignedInOnly({ children }: { children: ReactNode }) {
   }
   if (session.reached) return <LoadingState label={t('session.starting')} />;
   return (
-    <Screen title={t('session.noSignal')} brand={<Brand />} maxWidth={560}>
+    <Screen title={t('session.noSignal')} brand={<Brand />} withoutRail maxWidth={560}>
       <ErrorState title={t('session.notReached')} onRetry={() => void startSession()}>
         {t('session.notReachedHow')}
       </ErrorState>

@@ -94,7 +94,7 @@ function Rail({ here, signedInAs, company }: { here: PlaceKey | null; signedInAs
         ))}
       </View>
       <Link href="/account" asChild>
-        <Pressable role="link" aria-label={t('shell.account', { role: signedInAs, company })} style={styles.account}>
+        <Pressable role="link" style={styles.account}>
           <Body size="tiny" tone="ink2">
             {t('shell.signedInAs', { role: signedInAs })}
           </Body>

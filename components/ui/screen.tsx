@@ -22,8 +22,10 @@ interface ScreenProps {
   crumbs?: readonly Crumb[];
   /** At the right of the header: a `StatusPill`. */
   pill?: ReactNode;
-  /** Above the header, on a phone only: the brand. */
+  /** Above the header, on a phone only, where no rail shows it: the brand. */
   brand?: ReactNode;
+  /** There is no rail at any width, so the brand is drawn at every one. */
+  withoutRail?: boolean;
   /** The screen's buttons, at most one of them primary: at the thumb on a phone, at the right of the header from 900 px. */
   actions?: ReactNode;
   /** The header is drawn larger: for the first screen of a tab. */
@@ -44,7 +46,7 @@ export function Screen({ maxWidth = 1480, ...props }: ScreenProps) {
   }, [props.title]);
   const body = (
     <View style={[wide ? styles.wideBody : styles.body, props.fixed ? styles.fill : null, { maxWidth }]}>
-      {wide ? null : props.brand}
+      {wide && !props.withoutRail ? null : props.brand}
       {wide ? <WideHeader {...props} /> : <PhoneHeader {...props} />}
       {props.children}
     </View>

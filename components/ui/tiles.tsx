@@ -15,6 +15,6 @@ export function Tiles({ children, least = 320 }: { children: ReactNode; least?: 
 
 const styles = StyleSheet.create({
   tiles: { flexDirection: 'row', flexWrap: 'wrap', gap: space.m },
-  // Grows to fill its row and shrinks under `least` on a narrow phone.
-  tile: { flexGrow: 1, flexShrink: 1, minWidth: 0, maxWidth: '100%' },
+  // Grows to fill its row, but a lone one is no banner; shrinks under `least` on a narrow phone.
+  tile: { flexGrow: 1, flexShrink: 1, minWidth: 0, maxWidth: 640 },
 });
