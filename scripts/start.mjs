@@ -5,19 +5,18 @@ import { fileURLToPath } from 'node:url';
 import { sayFailure } from './announce.mjs';
 import { bootstrap } from './bootstrap.mjs';
 import { endRunning } from './child.mjs';
+import { whenAskedToEnd } from './end-requests.mjs';
 import { takeSingleStart } from './single-start.mjs';
 
 const root = dirname(dirname(fileURLToPath(import.meta.url)));
 
-/** Resolves to the name of the signal that asks us to end. npm passes on a Ctrl-C that the terminal sent us already: it counts once. */
-const askedToEnd = new Promise((resolve) => {
-  for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) process.on(signal, () => resolve(signal));
-});
-
 let ending = false;
-void askedToEnd.then(() => {
-  ending = true;
-  endRunning();
+const askedToEnd = new Promise((resolve) => {
+  whenAskedToEnd(() => {
+    ending = true;
+    endRunning();
+    resolve('asked');
+  });
 });
 
 async function start() {

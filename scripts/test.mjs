@@ -6,17 +6,16 @@ import { fileURLToPath } from 'node:url';
 import { sayFailure, Stop } from './announce.mjs';
 import { bootstrap } from './bootstrap.mjs';
 import { endRunning } from './child.mjs';
+import { whenAskedToEnd } from './end-requests.mjs';
 import { chosenSteps, packagesFor, TEST_STEPS } from './test-steps.mjs';
 
 const root = dirname(dirname(fileURLToPath(import.meta.url)));
 
 let ending = false;
-for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) {
-  process.on(signal, () => {
-    ending = true;
-    endRunning();
-  });
-}
+whenAskedToEnd(() => {
+  ending = true;
+  endRunning();
+});
 
 async function test() {
   const { steps, unknown } = chosenSteps(process.argv.slice(2));
