@@ -53,7 +53,6 @@ export function OutlineMeasures({ editor, units }: { editor: OutlineEditor; unit
           <View key={name}>
             <ListRow
               title={t('measure.diagonal', { from: diagonal.from, to: diagonal.to })}
-              label={t('measure.spokenDiagonal', { from: diagonal.from, to: diagonal.to, length })}
               end={length}
               onPress={() => setOpen(open === name ? null : name)}
               last={index === across.length - 1}

@@ -50,6 +50,9 @@ export function OutlineNotices({ editor, units, may }: OutlineNoticesProps) {
 
 const degrees = (value: number) => new Intl.NumberFormat(i18n.language, { maximumFractionDigits: 2 }).format(value);
 
+/** Feet stay with their inches at the end of a line. */
+const unbroken = (length: string) => length.replaceAll(' ', '\u00a0');
+
 /** "run 6 is 22′ 0″, run 2 is 29′ 10″, or run 4 is 8′ 2″": every single run that closes it, and a button each. */
 function Misclosure({ editor, units, may }: OutlineNoticesProps) {
   const { t } = useTranslation('outline');
@@ -57,14 +60,14 @@ function Misclosure({ editor, units, may }: OutlineNoticesProps) {
   if (state.kind !== 'misses') return null;
   const mends = state.mends.map((mend) => ({ ...mend, words: toTheMark(mend.length, units) }));
   const list = new Intl.ListFormat(i18n.language, { type: 'disjunction' }).format(
-    mends.map(({ number, words }) => t('state.mend', { number, length: words })),
+    mends.map(({ number, words }) => t('state.mend', { number, length: unbroken(words) })),
   );
   const [only] = mends;
   const sentence =
     only === undefined
       ? t('state.noMend')
       : mends.length === 1
-        ? t('state.mendsOne', { number: only.number, length: only.words })
+        ? t('state.mendsOne', { number: only.number, length: unbroken(only.words) })
         : t('state.mendsMany', { list });
   return (
     <Notice

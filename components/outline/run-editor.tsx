@@ -154,7 +154,7 @@ function OwnSizes({ run, units, footing, refusal, dispatch }: OwnSizesProps) {
 const styles = StyleSheet.create({
   box: { borderWidth: 2, borderRadius: radius.card, padding: space.m, gap: space.m, marginVertical: space.s },
   row: { flexDirection: 'row', flexWrap: 'wrap', alignItems: 'flex-start', gap: space.m },
-  turn: { flexGrow: 1, flexShrink: 1, flexBasis: 230 },
-  angle: { flexGrow: 1, flexShrink: 1, flexBasis: 150, minWidth: 0 },
+  turn: { flexGrow: 1, flexShrink: 1, flexBasis: 220 },
+  angle: { flexGrow: 1, flexShrink: 1, flexBasis: 84, minWidth: 0 },
   half: { flexGrow: 1, flexShrink: 1, flexBasis: 150, minWidth: 0 },
 });

@@ -1,6 +1,7 @@
 import { useEffect, useRef } from 'react';
 import { useTranslation } from 'react-i18next';
 import { Pressable, StyleSheet, View } from 'react-native';
+import { HeardOnly } from '@/components/ui/heard-only';
 import { Body, Figure, Heading, Label } from '@/components/ui/text';
 import { space, target } from '@/constants/theme';
 import { useTokens } from '@/hooks/use-tokens';
@@ -80,6 +81,7 @@ function RunRow({ editor, run, index, units, onPress }: RunRowProps) {
   const start = grades.starts[index];
   const grade = start === undefined ? '' : toTheMark(start, units);
   const notes = here ? [...stepWords(here, units), ...sizeWords(here, units)] : [];
+  const end = [grade, ...notes].filter((part) => part !== '').join(', ');
   const closed = draft.closed === run.id;
   // The editor that was here is gone and its focus with it: whoever works by keyboard goes on from this row.
   useEffect(() => {
@@ -87,29 +89,25 @@ function RunRow({ editor, run, index, units, onPress }: RunRowProps) {
   }, [closed]);
   const inside = (
     <>
-      <Label style={styles.number}>{index + 1}</Label>
-      <Figure size={here ? 'head' : 'text'} weight="bold" tone={here ? 'ink' : 'caution'} style={styles.length}>
-        {length}
-      </Figure>
-      <Body tone="ink2" style={styles.turn}>
-        {turn}
-      </Body>
-      <Figure align="right" style={styles.grade}>
-        {[grade, ...notes].filter((part) => part !== '').join(', ')}
-      </Figure>
+      <HeardOnly>{t('run.spoken', { number: index + 1, length, turn, grade: end })}</HeardOnly>
+      <View aria-hidden style={styles.seen}>
+        <Label style={styles.number}>{index + 1}</Label>
+        <Figure size={here ? 'head' : 'text'} weight="bold" tone={here ? 'ink' : 'caution'} style={styles.length}>
+          {length}
+        </Figure>
+        <Body tone="ink2" style={styles.turn}>
+          {turn}
+        </Body>
+        <Figure align="right" style={styles.grade}>
+          {end}
+        </Figure>
+      </View>
     </>
   );
   const box = [styles.row, { borderBottomColor: tokens.rule }];
   if (!onPress) return <View style={box}>{inside}</View>;
   return (
-    <Pressable
-      ref={place}
-      role="button"
-      aria-expanded={false}
-      aria-label={[t('run.spoken', { number: index + 1, length, turn, grade }), ...notes].join(', ')}
-      onPress={onPress}
-      style={box}
-    >
+    <Pressable ref={place} role="button" aria-expanded={false} onPress={onPress} style={box}>
       {inside}
     </Pressable>
   );
@@ -117,15 +115,8 @@ function RunRow({ editor, run, index, units, onPress }: RunRowProps) {
 
 const styles = StyleSheet.create({
   head: { flexDirection: 'row', flexWrap: 'wrap', alignItems: 'baseline', justifyContent: 'space-between', borderBottomWidth: 1 },
-  row: {
-    flexDirection: 'row',
-    flexWrap: 'wrap',
-    alignItems: 'center',
-    columnGap: space.m,
-    minHeight: 50,
-    paddingVertical: space.s,
-    borderBottomWidth: 1,
-  },
+  row: { minHeight: 50, justifyContent: 'center', paddingVertical: space.s, borderBottomWidth: 1 },
+  seen: { flexDirection: 'row', flexWrap: 'wrap', alignItems: 'center', columnGap: space.m },
   number: { minWidth: 18 },
   length: { minWidth: 88, flexShrink: 1 },
   turn: { flexGrow: 1, flexShrink: 1, flexBasis: 84, minHeight: target.least / 2 },

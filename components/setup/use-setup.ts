@@ -64,7 +64,9 @@ const optionalLength = (text: string, rule: LengthRule): Nm | null => (text.trim
 export function useSetup(roundId: string, view: ReadyRound) {
   const { bundle, state } = view;
   const recorder = useRecorder(roundId, view);
-  const [picked, setPicked] = useState<Picked>(() => usualPick(bundle, state));
+  const [chosen, setChosen] = useState<Partial<Picked>>({});
+  // Worked out anew each time: a benchmark that was just added, and is the only one, is picked when it arrives.
+  const picked: Picked = { ...usualPick(bundle, state), ...chosen };
   const [stand, setStand] = useState<PlanPoint | null>(null);
   const [distance, setDistance] = useState('');
   const [text, setText] = useState('');
@@ -104,6 +106,7 @@ export function useSetup(roundId: string, view: ReadyRound) {
       const benchmarkDistance = optionalLength(distance, distanceRule);
       const into = seriesId ?? (await recorder.startSetup({ laserId, rodId, stand, benchmarkDistance, checkLimit })).seriesId;
       setSeriesId(into);
+      setChosen({ laserId, rodId, benchmarkId });
       await recorder.recordBacksight({
         seriesId: into,
         benchmarkId,
@@ -126,7 +129,7 @@ export function useSetup(roundId: string, view: ReadyRound) {
     /** What was picked belongs to the setup once that is recorded. */
     fixed: seriesId !== null,
     pick: (part: keyof Picked, id: string) => {
-      setPicked({ ...picked, [part]: id });
+      setChosen({ ...chosen, [part]: id });
       setRefusal(null);
     },
     stand,

@@ -37,13 +37,13 @@ export function StationList({ editor, footing, units, may }: StationListProps) {
           const side = station.step === null ? [] : [t(station.step === 'before' ? 'list.before' : 'list.after')];
           const corner = station.corner === null ? [] : [t('list.corner', { letter: station.corner })];
           const grade = t('list.grade', { grade: toTheMark(station.planGrade, units) });
+          const note = [...corner, ...side, grade].join(', ');
           return (
             <View key={station.id} role="listitem">
               <ListRow
                 title={station.name}
-                note={[...corner, ...side, grade].join(', ')}
+                note={note}
                 end={at}
-                label={[t('list.spoken', { name: station.name, at }), ...corner, ...side].join(', ')}
                 onPress={may ? () => setOpen(open === station.id ? null : station.id) : undefined}
                 last={index === stations.length - 1}
               />
