@@ -27,13 +27,13 @@ export async function step(label, work, { silent = true } = {}) {
   const seconds = () => (performance.now() - began) / 1000;
   console.log(`· ${label} …`);
   const patience = silent
-    ? setInterval(() => console.log(`  still at it after ${seconds().toFixed(0)} s`), PATIENCE_MS)
+    ? setInterval(() => console.log(`  … ${label}: ${seconds().toFixed(0)} s so far`), PATIENCE_MS)
     : undefined;
   try {
     return await work();
   } finally {
     clearInterval(patience);
-    if (seconds() >= 1) console.log(`  took ${seconds().toFixed(1)} s`);
+    if (seconds() >= 1) console.log(`  ${label}: ${seconds().toFixed(1)} s`);
   }
 }
 

@@ -18,8 +18,10 @@ export interface RunningProduct {
   stop(): Promise<void>;
 }
 
-/** The demo says its sign-ins only when it is laid; a later start shows those it kept. */
-function keptSignIns(file: string, said: string[]): string[] {
+/** Lays the demo into an empty database. It says its sign-ins only then, so they are kept: a later start shows them again. */
+async function layDemo(root: string, database: StartDatabase): Promise<string[]> {
+  const said = await step('Laying the demo if the database is empty', () => seedDemo(root, database.url));
+  const file = join(dataFolder(root), 'demo-sign-ins.txt');
   if (said.length > 0) writeFileSync(file, said.join('\n'), { mode: 0o600 });
   return existsSync(file) ? readFileSync(file, 'utf8').split('\n') : [];
 }
@@ -94,12 +96,16 @@ export async function startProduct(root: string, began: number): Promise<Running
   const database = await startDatabase(root);
   try {
     await step('Bringing the database up to date', () => migrate(root, database.ownerUrl));
-    const said = await step('Laying the demo if the database is empty', () => seedDemo(root, database.url));
-    // At once: what the demo says it says only the first time.
-    const signIns = keptSignIns(join(dataFolder(root), 'demo-sign-ins.txt'), said);
     const webFolder = await ensureWebApp(root);
-    const server = await startServer(root, database, webFolder, wanted);
-    sayReady(root, server.address, signIns, began);
+    // Side by side: each takes seconds to load its code, and neither waits for the other.
+    const [demo, started] = await Promise.allSettled([layDemo(root, database), startServer(root, database, webFolder, wanted)]);
+    if (started.status === 'rejected') throw started.reason;
+    const server = started.value;
+    if (demo.status === 'rejected') {
+      await server.stop();
+      throw demo.reason;
+    }
+    sayReady(root, server.address, demo.value, began);
     return {
       address: server.address,
       ended: server.ended.then((code) => {
