@@ -56,7 +56,7 @@ export async function changeRod(tenant: Tenant, id: string, change: RodChange): 
   if (before === null) throw new NotFound();
   const rod = { ...rodOf(before), ...change };
   refuseForeignMarks(rod);
-  await orNameTaken(tenant.manager.update(RodEntity, key, rod));
+  if (Object.keys(change).length > 0) await orNameTaken(tenant.manager.update(RodEntity, key, change));
   return rod;
 }
 
