@@ -88,7 +88,8 @@ function useNewJob() {
     const { dirtyFields } = form.formState;
     form.resetField('graduation', { defaultValue: usual.graduation });
     for (const surface of SURFACES) {
-      if (!dirtyFields.rules?.[surface]) form.resetField(`rules.${surface}`, { defaultValue: usual.rules[surface] });
+      // Set rather than reset: a rule whose fields are closed is not registered, and resetting passes over it.
+      if (!dirtyFields.rules?.[surface]) form.setValue(`rules.${surface}`, usual.rules[surface]);
       else for (const limit of [`rules.${surface}.low`, `rules.${surface}.high`] as const) spellOut(limit, before);
     }
     if (!dirtyFields.bed) form.resetField('bed', { defaultValue: usual.bed });
