@@ -23,7 +23,7 @@ export function RecordRow({ label, onRecord, entry, rules, onKey, keys }: Record
   const finer = halfMark(rules.graduation);
   const open = entry.keypad !== null;
   return (
-    <KeysRegion label={label} style={styles.row}>
+    <KeysRegion label={t('mode.label')} style={styles.row}>
       {keys && entry.style === 'feet-inches' ? (
         <Button
           label={t(open ? 'keypad.close' : 'keypad.open')}

@@ -1,5 +1,5 @@
 import { useTranslation } from 'react-i18next';
-import { ScrollView, StyleSheet } from 'react-native';
+import { ScrollView, StyleSheet, useWindowDimensions } from 'react-native';
 import { placeWords } from '@/components/results/place-words';
 import { Card } from '@/components/ui/card';
 import { Table, type TableRow } from '@/components/ui/table';
@@ -20,6 +20,8 @@ interface ShotNotesProps {
 export function ShotNotes({ view, currentKey, onPick }: ShotNotesProps) {
   const { t } = useTranslation('shoot');
   const { state } = view;
+  // What a wide window has left under the laser and the strip, so that the keys beside it stay where they are.
+  const maxHeight = Math.max(useWindowDimensions().height - 500, 240);
   const shots = new Map(state.targets.flatMap((target) => target.shots.map((shot) => [shot.id, { shot, target }] as const)));
   const lines = state.series.flatMap((series) => series.readings.flatMap(({ record }) => shots.get(record.id) ?? [])).reverse();
   const columns = [
@@ -32,7 +34,7 @@ export function ShotNotes({ view, currentKey, onPick }: ShotNotesProps) {
       {lines.length === 0 ? (
         <Body style={styles.none}>{t('notes.none')}</Body>
       ) : (
-        <ScrollView tabIndex={0} style={styles.list}>
+        <ScrollView tabIndex={0} style={{ maxHeight }}>
           <Table
             label={t('notes.title')}
             columns={columns}
@@ -81,6 +83,5 @@ function Standing({ shot, view }: { shot: RoundShot; view: ReadyRound }) {
 }
 
 const styles = StyleSheet.create({
-  list: { maxHeight: 440 },
   none: { padding: 16 },
 });
