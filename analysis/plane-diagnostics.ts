@@ -88,8 +88,7 @@ export function quickPointFits(points: readonly PlanePoint[], plane: QuickPlane)
   const perPP = 1 / plane.sumPP;
   const perQQ = 1 / plane.sumQQ;
   const perWeight = 1 / plane.totalWeight;
-  // Its length is known: growing it would copy it again and again.
-  const fits = new Array<PointFit>(points.length);
+  const fits: PointFit[] = [];
   for (let i = 0; i < points.length; i += 1) {
     const point = points[i];
     if (point === undefined) break;
@@ -106,7 +105,7 @@ export function quickPointFits(points: readonly PlanePoint[], plane: QuickPlane)
     if (left < 1e-3 || (df > 1 && remaining < 1e-5 * df)) return null;
     const size = Math.sqrt(squared);
     const studentized = residual < 0 ? -size : size;
-    fits[i] = {
+    fits.push({
       id: point.id,
       fitted: point.z - residual,
       residual,
@@ -114,7 +113,7 @@ export function quickPointFits(points: readonly PlanePoint[], plane: QuickPlane)
       studentized,
       deletedStudentized: df > 1 ? studentized * Math.sqrt((df - 1) / remaining) : null,
       cooks: (squared * leverage) / (3 * left),
-    };
+    });
   }
   return fits;
 }

@@ -5,7 +5,8 @@ import { type PlaneFit, type PlanePoint, fUpperTail, fitPlane, studentTwoSided }
 
 /**
  * How long a plane fit with all its diagnostics takes, beside what else could have made it: ml-regression, ml-matrix's QR, R's lm with studentized
- * residuals, and a centred closed form that returns the same object without any of the care. One run, candidates in turn, medians.
+ * residuals, and a centred closed form that returns the same object without any of the care. One run, candidates in turn, medians of
+ * processor time.
  * `node --import tsx scripts/bench-analysis.ts`
  */
 
@@ -133,13 +134,13 @@ function byRegression(x: number[][], z: number[][]): number {
   return new MultivariateLinearRegression(x, z).stdError;
 }
 
-/** Median microseconds of one call in R itself, the start of R not counted. */
+/** Median processor microseconds of one call in R itself, the start of R not counted. */
 function inR(points: readonly PlanePoint[]): number {
   const vector = (values: number[]): string => `scan(text = "${values.join(' ')}", quiet = TRUE)`;
   const script = `x <- ${vector(points.map(({ x }) => x))}; y <- ${vector(points.map(({ y }) => y))}; z <- ${vector(points.map((point) => point.z))}
 one <- function() { f <- lm(z ~ x + y); s <- summary(f); c(s$sigma, rstandard(f)[1], rstudent(f)[1], hatvalues(f)[1], cooks.distance(f)[1]) }
 invisible(one()); calls <- max(1, round(20000 / length(z)))
-times <- replicate(9, { from <- proc.time()[["elapsed"]]; for (i in seq_len(calls)) one(); (proc.time()[["elapsed"]] - from) / calls })
+times <- replicate(9, { from <- sum(proc.time()[1:2]); for (i in seq_len(calls)) one(); (sum(proc.time()[1:2]) - from) / calls })
 cat(median(times) * 1e6)`;
   return Number(execFileSync('Rscript', ['--vanilla', '-'], { input: `${script}\n`, encoding: 'utf8', maxBuffer: 1 << 28 }));
 }
@@ -149,12 +150,13 @@ const median = (values: readonly number[]): number => [...values].sort((a, b) =>
 /** Kept from being optimized away: every result leaves a trace here. */
 let trace = 0;
 
-/** Microseconds a call over one round, the garbage of whoever ran before swept away first. */
+/** Processor microseconds a call over one round, so that a busy machine changes little; the garbage of whoever ran before is swept away first. */
 function time(call: () => number, calls: number): number {
   globalThis.gc?.();
-  const from = process.hrtime.bigint();
+  const from = process.cpuUsage();
   for (let i = 0; i < calls; i += 1) trace += call();
-  return Number(process.hrtime.bigint() - from) / 1000 / calls;
+  const { user, system } = process.cpuUsage(from);
+  return (user + system) / calls;
 }
 
 interface Row {
