@@ -185,7 +185,8 @@ function Profiles({ bundle, state, results, length }: PictureProps & { length: n
 function Plan({ bundle, state, results, closed }: PictureProps & { closed: boolean }) {
   const { t } = useTranslation('results');
   const { shape } = results;
-  const toward = shape ? fallWords(bundle, state, shape) : null;
+  // A tilt that reading error explains is no tilt to walk toward: the card says so, and the plan shows none.
+  const toward = shape && shape.againstLaser?.beyondReading !== false ? fallWords(bundle, state, shape) : null;
   return (
     <Card title={t('plan.title')}>
       <PlanView
