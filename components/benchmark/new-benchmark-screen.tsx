@@ -21,6 +21,7 @@ import { Screen } from '@/components/ui/screen';
 import { ApiError } from '@/hooks/api/client';
 import { jobQuery, useAddBenchmark } from '@/hooks/api/job-queries';
 import { useMay } from '@/hooks/session/use-session';
+import { useWide } from '@/hooks/use-wide';
 import type { Job } from '@/shared/api/job-endpoints';
 import type { UnitStyle } from '@/shared/quantities';
 import { CutSheetCard } from './cut-sheet-card';
@@ -83,13 +84,14 @@ function useBenchmarkForm(job: Job, back: Href) {
 
 function BenchmarkForm({ job, back }: { job: Job; back: Href }) {
   const { t } = useTranslation('setup');
+  const wide = useWide();
   const form = useBenchmarkForm(job, back);
   const { control } = form;
   const elevation = useWatch({ control, name: 'elevation' });
   return (
     <Screen
       title={t('benchmark.title')}
-      subtitle={job.name}
+      subtitle={wide ? undefined : job.name}
       back={back}
       crumbs={[{ label: job.name, href: `/jobs/${job.id}` }]}
       actions={

@@ -54,7 +54,17 @@ function OutlineEditing({ footing, job, personId }: { footing: Footing; job: Job
   const may = mayBefore && (!footing.hasShots || mayAfter);
   const [shapes, setShapes] = useState(false);
   const { draft, dispatch, state, read } = editor;
-  const picture = <OutlinePicture runs={read.drawn} state={state} width={footing.width} units={units} />;
+  // On a phone the list would push it out of sight: it goes along with the run that is being typed.
+  const goesAlong = !wide && may && draft.open !== null;
+  const picture = (
+    <OutlinePicture
+      runs={read.drawn}
+      state={state}
+      width={footing.width}
+      units={units}
+      heights={goesAlong ? [120, 170] : undefined}
+    />
+  );
   const measures = <OutlineMeasures editor={editor} units={units} />;
   const shapeForm = shapes ? (
     <ShapeForm
@@ -70,7 +80,7 @@ function OutlineEditing({ footing, job, personId }: { footing: Footing; job: Job
   return (
     <Screen
       title={t('title')}
-      subtitle={t('subtitle', { footing: footing.name, job: job.name })}
+      subtitle={wide ? undefined : t('subtitle', { footing: footing.name, job: job.name })}
       back={`/footings/${footing.id}`}
       crumbs={[
         { label: job.name, href: `/jobs/${job.id}` },
@@ -83,7 +93,7 @@ function OutlineEditing({ footing, job, personId }: { footing: Footing; job: Job
     >
       <Columns>
         <Column share={3}>
-          {picture}
+          {goesAlong ? null : picture}
           {may ? null : <Notice kind="plain">{t(mayBefore ? 'locked.shots' : 'locked.role')}</Notice>}
           <SavingNotices editor={editor} footingId={footing.id} />
           <View role="status">
@@ -101,7 +111,9 @@ function OutlineEditing({ footing, job, personId }: { footing: Footing; job: Job
             </EmptyState>
           ) : null}
           {shapeForm}
-          {draft.runs.length > 0 ? <RunList editor={editor} footing={footing} units={units} may={may} /> : null}
+          {draft.runs.length > 0 ? (
+            <RunList editor={editor} footing={footing} units={units} may={may} picture={goesAlong ? picture : null} />
+          ) : null}
           {draft.runs.length > 0 && !shapes && may ? (
             <Button label={t('action.shapesAgain')} variant="quiet" size="small" onPress={() => setShapes(true)} />
           ) : null}

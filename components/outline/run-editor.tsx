@@ -1,4 +1,4 @@
-import { useState, type Dispatch } from 'react';
+import { useState, type Dispatch, type ReactNode } from 'react';
 import { useTranslation } from 'react-i18next';
 import { StyleSheet, View } from 'react-native';
 import { v7 as newId } from 'uuid';
@@ -29,6 +29,8 @@ export interface RunEditorProps {
   left: readonly string[];
   dispatch: Dispatch<OutlineAction>;
   onNext: () => void;
+  /** Drawn above the fields, so that it grows in sight of whoever types. */
+  picture: ReactNode;
 }
 
 /** A run open for editing, in its place in the list. */
@@ -47,6 +49,7 @@ export function RunEditor({ run, number, last, units, refusals, left, dispatch, 
       style={[styles.box, { backgroundColor: tokens.paper, borderColor: tokens.ink }]}
     >
       <Heading level={3}>{t('run.name', { number })}</Heading>
+      {props.picture}
       <LengthField
         label={t('edit.length', { number })}
         hint={t('edit.lengthHint')}

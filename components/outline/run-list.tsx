@@ -1,4 +1,4 @@
-import { useEffect, useRef } from 'react';
+import { useEffect, useRef, type ReactNode } from 'react';
 import { useTranslation } from 'react-i18next';
 import { Pressable, StyleSheet, View } from 'react-native';
 import { HeardOnly } from '@/components/ui/heard-only';
@@ -18,10 +18,12 @@ interface RunListProps {
   units: JobUnits;
   /** Whether whoever looks may change it. */
   may: boolean;
+  /** The drawing where it has no place beside the list: it goes along with the run that is typed. */
+  picture: ReactNode;
 }
 
 /** The runs in walking order; the one that is open is edited in its place. */
-export function RunList({ editor, footing, units, may }: RunListProps) {
+export function RunList({ editor, footing, units, may, picture }: RunListProps) {
   const { t } = useTranslation('outline');
   const tokens = useTokens();
   const { draft, dispatch, read } = editor;
@@ -45,6 +47,7 @@ export function RunList({ editor, footing, units, may }: RunListProps) {
                 left={draft.left}
                 dispatch={dispatch}
                 onNext={editor.addRun}
+                picture={picture}
               />
             ) : (
               <RunRow
@@ -116,9 +119,9 @@ function RunRow({ editor, run, index, units, onPress }: RunRowProps) {
 const styles = StyleSheet.create({
   head: { flexDirection: 'row', flexWrap: 'wrap', alignItems: 'baseline', justifyContent: 'space-between', borderBottomWidth: 1 },
   row: { minHeight: 50, justifyContent: 'center', paddingVertical: space.s, borderBottomWidth: 1 },
-  seen: { flexDirection: 'row', flexWrap: 'wrap', alignItems: 'center', columnGap: space.m },
-  number: { minWidth: 18 },
+  seen: { flexDirection: 'row', flexWrap: 'wrap', alignItems: 'center', columnGap: space.s },
+  number: { minWidth: 14 },
   length: { minWidth: 88, flexShrink: 1 },
-  turn: { flexGrow: 1, flexShrink: 1, flexBasis: 84, minHeight: target.least / 2 },
-  grade: { flexGrow: 1, flexShrink: 1, minWidth: 80 },
+  turn: { flexGrow: 1, flexShrink: 1, flexBasis: 80, minHeight: target.least / 2 },
+  grade: { flexGrow: 1, flexShrink: 1, minWidth: 56 },
 });

@@ -71,16 +71,14 @@ export function ShapeForm({ units, replaces, onFill, onCancel }: ShapeFormProps)
     <Card title={t('shapes.title')}>
       <Choice
         label={t('shapes.which')}
+        layout="rows"
         value={shape}
         onChange={(chosen) => {
           setShape(chosen);
           setRefused(null);
         }}
-        options={READY_SHAPES.map((value) => ({ value, label: t(`shapes.${value}`) }))}
+        options={READY_SHAPES.map((value) => ({ value, label: t(`shapes.${value}`), note: t(`shapes.how.${value}`) }))}
       />
-      <Body size="small" tone="ink2">
-        {t(`shapes.how.${shape}`)}
-      </Body>
       <View style={styles.fields}>
         {fields.map((field) => (
           <LengthField

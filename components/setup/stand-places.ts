@@ -1,5 +1,6 @@
 import { NM_PER_FOOT, type LengthStyle, type Nm, type PlanPoint } from '@/analysis';
 import { printRound } from '@/components/lengths/print-length';
+import { stationTitle } from '@/components/stations/station-preview';
 import { i18n } from '@/hooks/i18n/i18n';
 import type { Footing } from '@/shared/api/footing-schemas';
 import type { RoundTarget } from '@/shared/round/round-state';
@@ -71,5 +72,5 @@ export function farthestWords(stand: PlanPoint, targets: readonly RoundTarget[],
   const far = farthestFrom(stand, targets);
   const station = footing.stations.find(({ id }) => id === far?.stationId);
   if (far === null || station === undefined) return '';
-  return i18n.t('setup:stand.farthest', { station: station.name, distance: paced(far.distance, style) });
+  return i18n.t('setup:stand.farthest', { station: stationTitle(station), distance: paced(far.distance, style) });
 }

@@ -15,6 +15,7 @@ import { TextField } from '@/components/ui/text-field';
 import { space } from '@/constants/theme';
 import type { StationChange } from '@/hooks/api/footing-queries';
 import type { Footing, Station } from '@/shared/api/footing-schemas';
+import { stationTitle } from './station-preview';
 import type { StationsEditor } from './use-stations-editor';
 
 interface StationListProps {
@@ -29,20 +30,20 @@ export function StationList({ editor, footing, units, may }: StationListProps) {
   const { t } = useTranslation('stations');
   const [open, setOpen] = useState<string | null>(null);
   const stations = [...footing.stations].sort((p, q) => p.position - q.position);
+  // Where all stand on one grade, saying it at each says nothing.
+  const stepped = stations.some(({ planGrade }) => planGrade !== footing.planGrade);
   return (
     <Card title={t('list.title')} note={t('list.count', { count: stations.length })}>
       <View role="list">
         {stations.map((station, index) => {
           const at = toTheMark(station.at, units);
           const side = station.step === null ? [] : [t(station.step === 'before' ? 'list.before' : 'list.after')];
-          const corner = station.corner === null ? [] : [t('list.corner', { letter: station.corner })];
-          const grade = t('list.grade', { grade: toTheMark(station.planGrade, units) });
-          const note = [...corner, ...side, grade].join(', ');
+          const grade = stepped ? [t('list.grade', { grade: toTheMark(station.planGrade, units) })] : [];
           return (
             <View key={station.id} role="listitem">
               <ListRow
-                title={station.name}
-                note={note}
+                title={stationTitle(station)}
+                note={[...side, ...grade].join(', ')}
                 end={at}
                 onPress={may ? () => setOpen(open === station.id ? null : station.id) : undefined}
                 last={index === stations.length - 1}

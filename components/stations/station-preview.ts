@@ -37,6 +37,10 @@ const isClosed = (footing: Footing) => traceOutline(footing.runs).closure.angle 
 
 const drawn = (id: string, label: string, { x, y }: PlanPoint): PlanStation => ({ id, label, x, y, mark: 'not-shot' });
 
+/** A station as people call it: a corner by its letter and place, "C 0+74"; any other by its name. */
+export const stationTitle = ({ corner, name }: Pick<Station, 'corner' | 'name'>): string =>
+  corner === null ? name : `${corner} ${name}`;
+
 /** Where stations of this spacing would stand; null where the spacing cannot be laid out. */
 export function previewStations(footing: Footing, spacing: Nm): StationPlan | null {
   if (footing.runs.length === 0 || spacing < SPACING_LIMITS.least || spacing > SPACING_LIMITS.most) return null;

@@ -15,6 +15,7 @@ import { StatusPill } from '@/components/ui/status-pill';
 import { Body } from '@/components/ui/text';
 import { useFootingWithJob } from '@/hooks/api/use-footing-with-job';
 import { useMay } from '@/hooks/session/use-session';
+import { useWide } from '@/hooks/use-wide';
 import type { Footing } from '@/shared/api/footing-schemas';
 import type { Job } from '@/shared/api/job-endpoints';
 import { StationList } from './station-list';
@@ -41,12 +42,13 @@ function StationsEditing({ footing, job }: { footing: Footing; job: Job }) {
   const { t } = useTranslation('stations');
   const editor = useStationsEditor(footing, job);
   const may = useMay('station.write');
+  const wide = useWide();
   const units = unitsOf(job);
   const { shown, error } = editor;
   return (
     <Screen
       title={t('title')}
-      subtitle={t('subtitle', { footing: footing.name, job: job.name })}
+      subtitle={wide ? undefined : t('subtitle', { footing: footing.name, job: job.name })}
       back={`/footings/${footing.id}`}
       crumbs={[
         { label: job.name, href: `/jobs/${job.id}` },
@@ -71,10 +73,10 @@ function StationsEditing({ footing, job }: { footing: Footing; job: Job }) {
               </Card>
             ) : null}
             <Reach editor={editor} />
-            {may ? <Spacing editor={editor} /> : <Notice kind="plain">{t('locked')}</Notice>}
-            {error ? <Notice kind="refusal">{describeError(error)}</Notice> : null}
           </Column>
           <Column share={2}>
+            {may ? <Spacing editor={editor} /> : <Notice kind="plain">{t('locked')}</Notice>}
+            {error ? <Notice kind="refusal">{describeError(error)}</Notice> : null}
             {footing.stations.length > 0 ? <StationList editor={editor} footing={footing} units={units} may={may} /> : null}
             {may && footing.stations.length > 0 ? <AddStation editor={editor} /> : null}
           </Column>

@@ -29,7 +29,7 @@ async function open(first: Footing, { job = jobOf(), roles }: { job?: Job; roles
     },
   });
   const drawn = renderSignedIn(<StationsScreen footingId={FOOTING} />, roles);
-  await screen.findByText('Stepped footing · Ninth Street addition');
+  await screen.findByText('Stepped footing');
   return { calls, state, ...drawn };
 }
 
@@ -41,8 +41,8 @@ test('stations are previewed, laid out by the server, and listed with their corn
   await person.click(screen.getByText('Lay out 20 stations'));
   expect(await screen.findByText('20 stations')).toBeInTheDocument();
   expect(calls.find(({ name }) => name === 'setStations')?.body).toEqual({ spacing: 8 * FOOT });
-  expect(screen.getByText('0+74')).toBeInTheDocument();
-  expect(screen.getAllByText(/corner C, top of footing 99′ 6″/)).toHaveLength(1);
+  // The third corner, after runs of 44 and 30 ft.
+  expect(screen.getByText('C 0+74')).toBeInTheDocument();
 });
 
 test('a spacing wider than half a straightedge is warned about, in the job’s own unit', async () => {
