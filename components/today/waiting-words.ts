@@ -16,7 +16,7 @@ function hrefOf({ what, jobId, footingId, roundId, shot }: Waiting): Href {
   if (what === 'enter-laser') return '/lasers/new';
   if (what === 'enter-job') return '/jobs/new';
   if (roundId !== null && what === 'see-results') return { pathname: '/rounds/[roundId]/results', params: { roundId } };
-  if (roundId !== null && (what === 'finish-round' || what === 'mend-rails')) {
+  if (roundId !== null && what === 'finish-round') {
     return roundInHand({ id: roundId, shot });
   }
   if (footingId !== null && what === 'draw-outline') return { pathname: '/footings/[footingId]/outline', params: { footingId } };
@@ -28,7 +28,8 @@ function hrefOf({ what, jobId, footingId, roundId, shot }: Waiting): Href {
 /** What waits, said as the thing to do, with the button that does it. */
 export function waitingWords(waiting: Waiting): WaitingWords {
   const { what, shot, of } = waiting;
-  const counted = shot !== null && of !== null && of > 0 ? i18n.t('today:counted', { shot, of }) : null;
+  const counted =
+    what === 'finish-round' && shot !== null && of !== null && of > 0 ? i18n.t('today:counted', { shot, of }) : null;
   const place = waiting.jobName;
   return {
     title: i18n.t(`today:waiting.${what}.title`, { footing: waiting.footingName ?? '' }),

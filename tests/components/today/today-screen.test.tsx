@@ -71,6 +71,8 @@ test.each<[Waiting, string, string]>([
   [atFooting({ what: 'finish-round', roundId: ROUND, shot: 6, of: 14 }), 'Go on shooting', `/rounds/${ROUND}/shoot`],
   [atFooting({ what: 'finish-round', roundId: ROUND, shot: 0, of: 14 }), 'Set up the laser', `/rounds/${ROUND}/setup`],
   [atFooting({ what: 'shoot-rails' }), 'Open the footing', `/footings/${FOOTING}`],
+  // The round may be closed by now: the footing's home goes on with it or opens the next.
+  [atFooting({ what: 'mend-rails', roundId: ROUND, shot: 14, of: 14 }), 'Open the footing', `/footings/${FOOTING}`],
   [atFooting({ what: 'see-results', roundId: ROUND, shot: 14, of: 14 }), 'See the results', `/rounds/${ROUND}/results`],
 ])('what waits first has the one button of the screen: %j', async (waiting, button, href) => {
   await open({ waiting: [waiting], footings: [footing] });
