@@ -37,13 +37,17 @@ function parsePart(schema: z.ZodType | null, value: unknown, code: keyof typeof 
 
 /** Dotted path to what is wrong there; an unknown key is named by its own path. The first complaint of a path stands. */
 export function fieldErrors(issues: readonly z.core.$ZodIssue[]): Record<string, FieldError> {
-  const fields: Record<string, FieldError> = {};
+  // A map, because a key that somebody sends may be called `constructor`, which every object has.
+  const fields = new Map<string, FieldError>();
   for (const issue of issues) {
     const keys = issue.code === 'unrecognized_keys' ? issue.keys.map((key) => [...issue.path, key]) : [issue.path];
     const code = issue.code === 'unrecognized_keys' ? 'unknown-key' : issue.code.replaceAll('_', '-');
-    for (const key of keys) fields[key.map(String).join('.')] ??= { code, message: issue.message, ...detailsOf(issue) };
+    for (const key of keys) {
+      const path = key.map(String).join('.');
+      if (!fields.has(path)) fields.set(path, { code, message: issue.message, ...detailsOf(issue) });
+    }
   }
-  return fields;
+  return Object.fromEntries(fields);
 }
 
 function detailsOf(issue: z.core.$ZodIssue): { details?: Record<string, unknown> } {
