@@ -33,7 +33,12 @@ export async function seedDemo(source: DataSource): Promise<string[]> {
 }
 
 async function main(url: string): Promise<void> {
-  const source = createDataSource({ url, logger: pino({ level: 'warn' }, pino.destination(2)), poolSize: 1 });
+  const source = createDataSource({
+    url,
+    logger: pino({ level: 'warn' }, pino.destination(2)),
+    poolSize: 1,
+    patience: 'of-a-migration',
+  });
   await source.initialize();
   try {
     await refuseUnsafeRole(source);

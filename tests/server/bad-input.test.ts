@@ -117,7 +117,10 @@ const IMPOSSIBLE: [EndpointName, string, () => Loose, string, string][] = [
   [
     'setOutline',
     'an outline that crosses itself',
-    () => ({ params: footingId(), body: { runs: runsOf([20, 90], [20, 90], [10, 90], [30, 90]), version: 1 } }),
+    () => ({
+      params: footingId(),
+      body: { runs: runsOf([30, 90], [20, 90], [10, 90], [30, -90], [20, -90], [10, -90]), version: 1 },
+    }),
     'runs',
     'outline-crosses-itself',
   ],

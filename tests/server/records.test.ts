@@ -281,6 +281,22 @@ describe('who may', () => {
     expect(words(await send(phone, [phone.strike(randomUUID())], operator.token))).toEqual(['stored']);
   });
 
+  it('not by being early: a strike of what turns out to be somebody else’s counts for nothing, a super’s counts', async () => {
+    const operator = await company.hire('operator');
+    const other = await company.hire('operator');
+    const superintendent = await company.hire('super');
+    const phone = new TestPhone(site, api);
+    const shots = [...phone.begin(), phone.shot(0), phone.shot(1)];
+    const second = new TestPhone(site, api);
+    const early = second.strike(shots[3]?.id ?? '');
+    const ofSuper = second.strike(shots[4]?.id ?? '');
+    expect(words(await send(second, [early], other.token))).toEqual(['stored']);
+    expect(words(await send(second, [ofSuper], superintendent.token))).toEqual(['stored']);
+    await send(phone, shots, operator.token);
+    const strikes = (await stored()).records.map(({ record }) => record).filter(({ kind }) => kind === 'strike');
+    expect(strikes).toEqual([ofSuper]);
+  });
+
   it('shoot: an operator any surface, an installer the top alone, a super none', async () => {
     const installer = await company.hire('installer');
     const superintendent = await company.hire('super');

@@ -41,6 +41,12 @@ export async function lockFooting({ manager, actor }: Tenant, id: string): Promi
   return row;
 }
 
+/** Keeps outline and stations as they are until the transaction ends; others may hold them too. */
+export async function holdFooting({ manager, actor }: Tenant, id: string): Promise<void> {
+  const where = { companyId: actor.companyId, id };
+  await manager.findOneOrFail(FootingEntity, { where, lock: { mode: 'pessimistic_read' } });
+}
+
 /** What belongs to these footings, each with its own. */
 export async function readFootingRows({ manager, actor }: Tenant, footings: readonly FootingRow[]): Promise<FootingRows[]> {
   const { companyId } = actor;

@@ -5,6 +5,7 @@ import type { FieldRecord, RecordAnswer, Refusal, StoredRecord } from '@/shared/
 import type { Tenant } from '../../api/handler';
 import { RecordEntity, RoundEntity, type RecordRow, type RoundRow } from '../../entities/rounds';
 import { namesOf } from '../crew/crew-service';
+import { holdFooting } from '../footings/footing-rows';
 import { findRound, lockRound } from '../rounds/round-service';
 import { lockDevices, readTimelines, type DeviceTimeline } from './device-timeline';
 import { refusalOf } from './judge-record';
@@ -37,6 +38,7 @@ export async function readRecords(
  */
 export async function sendRecords(tenant: Tenant, roundId: string, { sentAt, records }: Batch): Promise<RecordAnswer[]> {
   const round = await lockRound(tenant, roundId);
+  await holdFooting(tenant, round.footingId);
   const entries = records.map(readEntry);
   const places = entries.flatMap(({ place }) => (place === null ? [] : [place]));
   await lockDevices(

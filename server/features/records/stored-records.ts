@@ -7,6 +7,7 @@ import type {
   StoredRecord,
   StrikeRecord,
 } from '@/shared/records';
+import { may, ROLES } from '@/shared/roles';
 import type { Tenant } from '../../api/handler';
 import type { RecordRow, SeriesRow, SetupRow, ShotRow, StrikeRow } from '../../entities/rounds';
 import { namesOf } from '../crew/crew-service';
@@ -32,13 +33,24 @@ const COLUMNS = `
   shot.benchmark_id "benchmarkId", shot.turning_name "turningName", shot.how, shot.receiver, shot.keyed, shot.style, shot.reading, shot.lap,
   strike.target_id "targetId", strike.reason, strike.words`;
 
+/**
+ * A strike that came before its target could not be asked whose that is. Where it turns out to be somebody else's, and who struck it may strike only
+ * their own, the strike counts for nothing.
+ */
+const STRIKE_OF_ANOTHERS = `
+  select from records target join memberships striker on striker.company_id = r.company_id and striker.person_id = r.person_id
+  where target.company_id = r.company_id and target.id = strike.target_id and target.round_sequence > r.round_sequence
+    and target.person_id <> r.person_id and not striker.roles && array[${ROLES.filter((role) => may([role], 'shot.strike-any'))
+      .map((role) => `'${role}'`)
+      .join(', ')}]`;
+
 const FROM = `
   from records r
   left join setups setup on setup.company_id = r.company_id and setup.record_id = r.id
   left join series on series.company_id = r.company_id and series.record_id = r.id
   left join shots shot on shot.company_id = r.company_id and shot.record_id = r.id
   left join strikes strike on strike.company_id = r.company_id and strike.record_id = r.id
-  where r.company_id = $1 and r.refusal is null`;
+  where r.company_id = $1 and r.refusal is null and not exists (${STRIKE_OF_ANOTHERS})`;
 
 /** Records of one round after a sequence number, in that order; at most `limit`. */
 export async function recordsAfter(tenant: Tenant, roundId: string, after: number, limit: number): Promise<StoredRecord[]> {

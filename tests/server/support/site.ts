@@ -85,9 +85,9 @@ export function openRound(api: TestApi, token: string, footingId: string, surfac
 /** A phone as tests have it: makes records with its own clock, which may be off. */
 export class TestPhone {
   readonly deviceId = randomUUID();
-  /** Ids of the last setup and series. */
-  setupId = '';
-  seriesId = '';
+  /** The setup and series that `begin` makes and every reading belongs to. */
+  readonly setupId = randomUUID();
+  readonly seriesId = randomUUID();
   private sequence = 0;
 
   constructor(
@@ -114,11 +114,10 @@ export class TestPhone {
 
   /** A setup, its series, and a backsight of 4 ft: HI 104 ft. */
   begin(): FieldRecord[] {
-    const setup = { ...this.stamp(), kind: 'setup', laserId: this.site.laserId, stand: null } as const;
-    this.setupId = setup.id;
+    const setup = { ...this.stamp(), id: this.setupId, kind: 'setup', laserId: this.site.laserId, stand: null } as const;
     const limits = { checkLimit: INCH / 8, benchmarkDistance: null };
-    const series = { ...this.stamp(), kind: 'series', setupId: setup.id, rodId: this.site.rodId, ...limits } as const;
-    this.seriesId = series.id;
+    const own = { id: this.seriesId, setupId: this.setupId, rodId: this.site.rodId };
+    const series = { ...this.stamp(), ...own, kind: 'series', ...limits } as const;
     return [setup, series, this.onBenchmark('backsight')];
   }
 
