@@ -50,5 +50,6 @@ export function EntryPanel({ entry, rules, onKey, onSubmit, refused, refusalId, 
 
 const styles = StyleSheet.create({
   panel: { gap: space.s },
-  row: { flexDirection: 'row', gap: space.s },
+  // On the narrowest phones the stepper goes under the reading.
+  row: { flexDirection: 'row', flexWrap: 'wrap', gap: space.s },
 });

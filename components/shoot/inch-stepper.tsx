@@ -36,7 +36,7 @@ export function InchStepper({ inches, onStep }: InchStepperProps) {
 }
 
 const styles = StyleSheet.create({
-  box: { flexDirection: 'row', borderWidth: 2, borderRadius: radius.button, width: 148 },
+  box: { flexDirection: 'row', borderWidth: 2, borderRadius: radius.button, flexGrow: 1, flexBasis: 148, maxWidth: 320 },
   step: { flex: 1, minHeight: target.shootHeight, alignItems: 'center', justifyContent: 'center' },
   middle: { width: 48, borderLeftWidth: 1, borderRightWidth: 1, justifyContent: 'center' },
 });

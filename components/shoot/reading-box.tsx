@@ -93,7 +93,9 @@ function Shown({ entry, text }: { entry: ReadingEntry; text: string | null }) {
 
 const styles = StyleSheet.create({
   box: {
-    flex: 1,
+    flexGrow: 1,
+    flexShrink: 1,
+    flexBasis: 200,
     minWidth: 0,
     minHeight: 58,
     borderWidth: 2,

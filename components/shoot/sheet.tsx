@@ -1,5 +1,5 @@
 import { useId, type ReactNode } from 'react';
-import { Modal, Pressable, StyleSheet, View } from 'react-native';
+import { Modal, StyleSheet, View } from 'react-native';
 import { Body, Heading } from '@/components/ui/text';
 import { radius, space } from '@/constants/theme';
 import { useTokens } from '@/hooks/use-tokens';
@@ -19,10 +19,12 @@ export function Sheet({ title, children, actions, onClose }: SheetProps) {
   const id = useId();
   // The web's own attributes, which react-native's Modal does not know: the dialog is named by its heading.
   const named = { 'aria-labelledby': id };
+  // A press beside the sheet closes it; no button, because Tab has nothing to do there.
+  const beside = { onClick: onClose };
   return (
     <Modal {...named} visible transparent animationType="none" onRequestClose={onClose}>
       <View style={styles.over}>
-        <Pressable aria-hidden tabIndex={-1} onPress={onClose} style={[styles.behind, { backgroundColor: tokens.ink }]} />
+        <View {...beside} aria-hidden style={[styles.behind, { backgroundColor: tokens.ink }]} />
         <View style={[styles.sheet, { backgroundColor: tokens.paper, borderColor: tokens.ink }]}>
           <Heading id={id} level={2} size="head">
             {title}

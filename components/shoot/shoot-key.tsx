@@ -3,9 +3,10 @@ import { Pressable, StyleSheet, Text, type StyleProp, type ViewStyle } from 'rea
 import { fonts } from '@/constants/fonts';
 import { radius, target, typeSize } from '@/constants/theme';
 import { useTokens } from '@/hooks/use-tokens';
+import { SpokenOnly } from './spoken-only';
 
 interface ShootKeyProps {
-  /** What a screen reader says. */
+  /** What a screen reader says. It is text in the key, not a label over it: what is drawn then need not repeat it. */
   label: string;
   onPress: () => void;
   /** Words or a drawn fraction; the drawn text takes `tone` from `pressed`. */
@@ -24,7 +25,6 @@ export function ShootKey({ label, onPress, children, chosen, size = 'title', sty
   return (
     <Pressable
       role="button"
-      aria-label={label}
       aria-pressed={chosen}
       onPress={onPress}
       style={({ pressed }) => [
@@ -36,8 +36,9 @@ export function ShootKey({ label, onPress, children, chosen, size = 'title', sty
         style,
       ]}
     >
+      {drawn === label ? null : <SpokenOnly tone={tone}>{label}</SpokenOnly>}
       {typeof drawn === 'string' ? (
-        <Text aria-hidden style={[styles.text, { color: tokens[tone], fontSize: typeSize[size] }]}>
+        <Text aria-hidden={drawn !== label} style={[styles.text, { color: tokens[tone], fontSize: typeSize[size] }]}>
           {drawn}
         </Text>
       ) : (

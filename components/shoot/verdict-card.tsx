@@ -7,6 +7,7 @@ import { Body, Figure } from '@/components/ui/text';
 import { fonts } from '@/constants/fonts';
 import { radius, space, typeSize } from '@/constants/theme';
 import { useTokens } from '@/hooks/use-tokens';
+import { SpokenOnly } from './spoken-only';
 import { spokenVerdict, type VerdictWords } from './verdict-words';
 
 interface VerdictCardProps {
@@ -27,10 +28,10 @@ export function VerdictCard({ words, waiting, refusal, refusalId }: VerdictCardP
   const spoken = words === null || refusal !== null ? '' : spokenVerdict(words, (length) => spokenLength(length, t));
   return (
     <View style={[styles.card, { backgroundColor: ground, borderColor: tone === null ? tokens.rule2 : tokens[tone] }]}>
-      <View role="status" aria-live="polite" style={styles.onlySpoken}>
-        <Text>{spoken}</Text>
+      <View role="status" aria-live="polite">
+        <SpokenOnly>{spoken}</SpokenOnly>
       </View>
-      <View role="alert" id={refusalId} style={refusal === null ? styles.onlySpoken : styles.sentence}>
+      <View role="alert" id={refusalId} style={refusal === null ? null : styles.sentence}>
         {refusal === null ? null : <Body tone="ink">{refusal}</Body>}
       </View>
       {refusal !== null ? null : words === null ? (
@@ -79,5 +80,4 @@ const styles = StyleSheet.create({
   large: { fontFamily: fonts.figureBold, fontSize: typeSize.verdict, lineHeight: 40 },
   side: { flexShrink: 1, maxWidth: 130 },
   sentence: { paddingVertical: space.s },
-  onlySpoken: { position: 'absolute', width: 1, height: 1, overflow: 'hidden' },
 });

@@ -56,6 +56,13 @@ export function mergeStored(client: QueryClient, roundId: string, stored: readon
   }));
 }
 
+/** How much is shot shows on Today, in the jobs and at the footing: they are asked for again when they are next looked at. */
+export function shotsChanged(client: QueryClient): void {
+  for (const queryKey of [queryKeys.today, queryKeys.jobs.all, queryKeys.footings.all]) {
+    void client.invalidateQueries({ queryKey, refetchType: 'none' });
+  }
+}
+
 function withRecords(held: StoredRecord[], more: readonly StoredRecord[]): StoredRecord[] {
   const known = new Set(held.map(({ record }) => record.id));
   const fresh = more.filter(({ record }) => !known.has(record.id));

@@ -1,6 +1,6 @@
 import { useQueryClient } from '@tanstack/react-query';
 import { useEffect, useSyncExternalStore } from 'react';
-import { mergeStored } from '../api/round-queries';
+import { mergeStored, shotsChanged } from '../api/round-queries';
 import { useSession } from '../session/use-session';
 import { browserOutbox } from './browser-outbox';
 import type { OutboxSnapshot } from './outbox';
@@ -25,5 +25,12 @@ export function useOutboxRunner(): void {
   useEffect(() => {
     if (accessToken !== null) browserOutbox().send();
   }, [accessToken]);
-  useEffect(() => browserOutbox().onStored((roundId, records) => mergeStored(client, roundId, records)), [client]);
+  useEffect(
+    () =>
+      browserOutbox().onStored((roundId, records) => {
+        mergeStored(client, roundId, records);
+        shotsChanged(client);
+      }),
+    [client],
+  );
 }
