@@ -1,5 +1,4 @@
-import { createServer, connect, type Socket } from 'node:net';
-import type { AddressInfo } from 'node:net';
+import { createServer, connect, type AddressInfo, type Socket } from 'node:net';
 
 /** A way to a database that can be cut and mended: bytes pass unchanged, so both ends speak their own protocol. */
 export interface CutOff {
