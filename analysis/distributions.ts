@@ -28,22 +28,30 @@ function gammaHalfRatio(a: number): number {
   return factor * Math.sqrt(at) * series;
 }
 
-/** Continued fraction of the incomplete beta function by Lentz's method (Numerical Recipes 6.4, from memory); x under its turning point. */
+/**
+ * Continued fraction of the incomplete beta function by its forward recurrence, two steps and one division at a time (Abramowitz & Stegun 26.5.8,
+ * from memory); x under its turning point, so that a few dozen steps settle it.
+ */
 function betaFraction(a: number, b: number, x: number): number {
-  let c = 1;
-  let d = 1 / (1 - ((a + b) * x) / (a + 1));
-  let value = d;
+  let earlierTop = 1;
+  let earlierBottom = 1;
+  let value = 1;
+  let bottom = 1 - ((a + b) * x) / (a + 1);
+  value /= bottom;
+  earlierTop /= bottom;
+  earlierBottom /= bottom;
   for (let m = 1; m < 10_000; m += 1) {
-    const even = (m * (b - m) * x) / ((a + 2 * m - 1) * (a + 2 * m));
-    d = 1 / (1 + even * d);
-    c = 1 + even / c;
-    value *= d * c;
-    const odd = (-(a + m) * (a + b + m) * x) / ((a + 2 * m) * (a + 2 * m + 1));
-    d = 1 / (1 + odd * d);
-    c = 1 + odd / c;
-    const change = d * c;
-    value *= change;
-    if (Math.abs(change - 1) < 1e-15) return value;
+    const at = a + 2 * m;
+    const even = (m * (b - m) * x) / ((at - 1) * at);
+    const top = value + even * earlierTop;
+    const evenBottom = 1 + even * earlierBottom;
+    const odd = (-(a + m) * (a + b + m) * x) / (at * (at + 1));
+    bottom = 1 / (evenBottom + odd);
+    const before = value;
+    earlierTop = top * bottom;
+    earlierBottom = evenBottom * bottom;
+    value = (top + odd * value) * bottom;
+    if (Math.abs(value - before) <= 1e-15 * value) return value;
   }
   throw new AnalysisError('no-convergence', 'The tail of the t distribution did not settle.', { a, b, x });
 }

@@ -84,7 +84,8 @@ export function quickPointFits(points: readonly PlanePoint[], plane: QuickPlane)
   const { first, mean, gradientX, gradientY, shear } = plane;
   const byX = plane.pivot === 'x';
   const df = points.length - 3;
-  const variance = plane.sumEE / df;
+  const perVariance = df / plane.sumEE;
+  const perRank = 1 / plane.rank;
   const perPP = 1 / plane.sumPP;
   const perQQ = 1 / plane.sumQQ;
   const perWeight = 1 / plane.totalWeight;
@@ -100,7 +101,8 @@ export function quickPointFits(points: readonly PlanePoint[], plane: QuickPlane)
     const weight = point.weight ?? 1;
     const leverage = weight * (perWeight + along * along * perPP + across * across * perQQ);
     const left = 1 - leverage;
-    const squared = (weight * residual * residual) / (variance * left);
+    const perLeft = 1 / left;
+    const squared = weight * residual * residual * perVariance * perLeft;
     const remaining = df - squared;
     if (left < 1e-3 || (df > 1 && remaining < 1e-5 * df)) return null;
     const size = Math.sqrt(squared);
@@ -112,7 +114,7 @@ export function quickPointFits(points: readonly PlanePoint[], plane: QuickPlane)
       leverage,
       studentized,
       deletedStudentized: df > 1 ? studentized * Math.sqrt((df - 1) / remaining) : null,
-      cooks: (squared * leverage) / (3 * left),
+      cooks: squared * leverage * perLeft * perRank,
     });
   }
   return fits;

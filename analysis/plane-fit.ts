@@ -47,7 +47,10 @@ function dropOver(s: PlaneSolution): number {
 }
 
 function tiltOf(s: PlaneShape, variance: number | null, drop: number): PlaneFit['tilt'] {
-  const slope = inRange('slope', s.model === 'line' ? Math.abs(s.alongP) : Math.hypot(s.gradientX, s.gradientY));
+  const slope = inRange(
+    'slope',
+    s.model === 'line' ? Math.abs(s.alongP) : Math.sqrt(s.gradientX * s.gradientX + s.gradientY * s.gradientY),
+  );
   const unit = variance === null ? null : slopeVariance(s, slope);
   return {
     slope,

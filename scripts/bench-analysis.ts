@@ -1,6 +1,6 @@
-import { execFileSync, spawnSync } from 'node:child_process';
+import { execFileSync } from 'node:child_process';
 import { MultivariateLinearRegression } from 'ml-regression';
-import { Matrix, QrDecomposition } from 'ml-matrix';
+import { Matrix, QrDecomposition, inverse } from 'ml-matrix';
 import { type PlaneFit, type PlanePoint, fUpperTail, fitPlane, studentTwoSided } from '../analysis';
 
 /**
@@ -120,18 +120,98 @@ function closedForm(points: readonly PlanePoint[]): PlaneFit {
   };
 }
 
-/** Coefficients, residuals and leverages by the library's QR: all that it offers towards the same answer. */
-function byMatrixQr(columns: Matrix, values: Matrix): number {
-  const qr = new QrDecomposition(columns);
-  const residuals = Matrix.sub(values, columns.mmul(qr.solve(values)));
-  const q = qr.orthogonalMatrix;
-  let check = 0;
-  for (let i = 0; i < q.rows; i += 1) check += q.get(i, 0) ** 2 + q.get(i, 1) ** 2 + q.get(i, 2) ** 2;
-  return check + residuals.get(0, 0);
+/** The contract's object from what a library gives: coefficients (a, b, c), their variances and each point's leverage; the rest is arithmetic. */
+function objectOf(
+  points: readonly PlanePoint[],
+  [a = NaN, b = NaN, c = NaN]: number[],
+  unit: (i: number, j: number) => number,
+  leverages: number[],
+): PlaneFit {
+  const n = points.length;
+  const df = n - 3;
+  let sse = 0;
+  let sum = 0;
+  for (const { x, y, z } of points) {
+    sse += (z - a - b * x - c * y) ** 2;
+    sum += z;
+  }
+  const meanZ = sum / n;
+  let zz = 0;
+  let [low, high] = [Infinity, -Infinity];
+  const variance = sse / df;
+  const fits = points.map(({ id, x, y, z }, i) => {
+    const fitted = a + b * x + c * y;
+    const residual = z - fitted;
+    const leverage = leverages[i] ?? NaN;
+    const left = 1 - leverage;
+    const studentized = residual / Math.sqrt(variance * left);
+    zz += (z - meanZ) ** 2;
+    low = Math.min(low, fitted);
+    high = Math.max(high, fitted);
+    const deletedStudentized = studentized * Math.sqrt((df - 1) / (df - studentized * studentized));
+    return {
+      id,
+      fitted,
+      residual,
+      leverage,
+      studentized,
+      deletedStudentized,
+      cooks: (studentized * studentized * leverage) / (3 * left),
+    };
+  });
+  const term = (value: number, unit: number): PlaneFit['a'] => {
+    const standardError = Math.sqrt(variance * unit);
+    const t = value / standardError;
+    return { value, standardError, t, p: studentTwoSided(t, df) };
+  };
+  const f = (zz - sse) / 2 / variance;
+  const slope = Math.hypot(b, c);
+  const perVariance = (b * b * unit(1, 1) + 2 * b * c * unit(1, 2) + c * c * unit(2, 2)) / (slope * slope);
+  const total = n * meanZ * meanZ + zz;
+  const east = (Math.atan2(-b, -c) * 180) / Math.PI;
+  return {
+    model: 'plane',
+    n,
+    df,
+    a: term(a, unit(0, 0)),
+    b: term(b, unit(1, 1)),
+    c: term(c, unit(2, 2)),
+    residualStandardError: Math.sqrt(variance),
+    rSquared: 1 - sse / zz,
+    fTest: { f, df1: 2, df2: df, p: fUpperTail(f, 2, df) },
+    tilt: {
+      slope,
+      slopeStandardError: Math.sqrt(variance * perVariance),
+      fallAzimuth: east < 0 ? east + 360 : east,
+      drop: high - low,
+    },
+    shares: { offset: (n * meanZ * meanZ) / total, tilt: (zz - sse) / total, rest: sse / total },
+    points: fits,
+  };
 }
 
-function byRegression(x: number[][], z: number[][]): number {
-  return new MultivariateLinearRegression(x, z).stdError;
+/** By the library's QR; the inverse of RᵀR gives the variances, the rows of Q the leverages. */
+function byMatrixQr(points: readonly PlanePoint[]): PlaneFit {
+  const qr = new QrDecomposition(new Matrix(points.map(({ x, y }) => [1, x, y])));
+  const coefficients = qr.solve(Matrix.columnVector(points.map(({ z }) => z))).to1DArray();
+  const upper = inverse(qr.upperTriangularMatrix);
+  const unit = upper.mmul(upper.transpose());
+  const q = qr.orthogonalMatrix;
+  const leverages = points.map((_, i) => q.get(i, 0) ** 2 + q.get(i, 1) ** 2 + q.get(i, 2) ** 2);
+  return objectOf(points, coefficients, (i, j) => unit.get(i, j), leverages);
+}
+
+/** By the library's multivariate regression; its covariance matrix, constant last, gives variances and leverages. */
+function byRegression(points: readonly PlanePoint[]): PlaneFit {
+  const { weights, stdError, stdErrorMatrix } = new MultivariateLinearRegression(
+    points.map(({ x, y }) => [x, y]),
+    points.map(({ z }) => [z]),
+  );
+  const [[b = NaN] = [], [c = NaN] = [], [a = NaN] = []] = weights;
+  const unit = (i: number, j: number): number => stdErrorMatrix.get((i + 2) % 3, (j + 2) % 3) / (stdError * stdError);
+  const [aa, ab, ac, bb, bc, cc] = [unit(0, 0), unit(0, 1), unit(0, 2), unit(1, 1), unit(1, 2), unit(2, 2)];
+  const leverages = points.map(({ x, y }) => aa + bb * x * x + cc * y * y + 2 * (ab * x + ac * y + bc * x * y));
+  return objectOf(points, [a, b, c], unit, leverages);
 }
 
 /** Median processor microseconds of one call in R itself, the start of R not counted. */
@@ -159,74 +239,58 @@ function time(call: () => number, calls: number): number {
   return (user + system) / calls;
 }
 
-interface Row {
-  name: string;
-  micros: number;
-}
+/** Each makes the same object. */
+const CANDIDATES: readonly { name: string; fit: (points: readonly PlanePoint[]) => PlaneFit }[] = [
+  { name: 'fitPlane', fit: fitPlane },
+  { name: 'centred closed form', fit: closedForm },
+  { name: 'ml-matrix QR', fit: byMatrixQr },
+  { name: 'ml-regression', fit: byRegression },
+];
 
-interface Candidate {
-  name: string;
-  call: () => number;
-  calls: number;
-  times: number[];
-}
-
-function measure(n: number): Row[] {
+/** Median of one candidate at one size, in this process. */
+function measure(fit: (points: readonly PlanePoint[]) => PlaneFit, n: number): number {
   const points = stations(n);
-  const columns = new Matrix(points.map(({ x, y }) => [1, x, y]));
-  const values = Matrix.columnVector(points.map(({ z }) => z));
-  const x = points.map((point) => [point.x, point.y]);
-  const z = points.map((point) => [point.z]);
-  const candidates = [
-    { name: 'fitPlane, all diagnostics', call: () => fitPlane(points).points.length },
-    { name: 'centred closed form, same object', call: () => closedForm(points).points.length },
-    { name: 'ml-matrix QR, leverages', call: () => byMatrixQr(columns, values) },
-    { name: 'ml-regression, no diagnostics', call: () => byRegression(x, z) },
-  ].map(({ name, call }): Candidate => {
-    time(call, Math.max(2, Math.ceil(20_000 / n)));
-    const calls = Math.max(1, Math.ceil((SECONDS_A_ROUND * 1e6) / Math.max(1, time(call, Math.max(1, Math.ceil(2_000 / n))))));
-    return { name, call, calls, times: [] };
-  });
-  for (let round = 0; round < ROUNDS; round += 1)
-    for (const candidate of candidates) candidate.times.push(time(candidate.call, candidate.calls));
-  return [
-    ...candidates.map(({ name, times }) => ({ name, micros: median(times) })),
-    { name: 'R lm, studentized residuals', micros: inR(points) },
-  ];
-}
-
-/** The same-object candidates beside each other from 1,000 to 100,000 stations: 1 is linear. */
-function growth(thousand: number | undefined, hundredThousand: number | undefined): string {
-  return ((hundredThousand ?? NaN) / (thousand ?? NaN) / 100).toFixed(2);
-}
-
-function main(): void {
-  const [own, closed]: [number[], number[]] = [[], []];
-  for (const n of SIZES) {
-    const rows = measure(n);
-    const ours = rows[0]?.micros ?? NaN;
-    own.push(ours);
-    closed.push(rows[1]?.micros ?? NaN);
-    console.log(`\n${n} stations`);
-    rows.forEach(({ name, micros }, i) => {
-      const against =
-        i === 0 ? `${(ours / (closed.at(-1) ?? NaN)).toFixed(2)} × the closed form` : `${(micros / ours).toFixed(2)} × fitPlane`;
-      console.log(`  ${name.padEnd(34)} ${micros.toFixed(2).padStart(12)} µs   ${against}`);
-    });
-  }
-  console.log(
-    `\nfrom 1,000 to 100,000 stations: fitPlane ${growth(own[1], own[2])} × linear, closed form ${growth(closed[1], closed[2])} × linear`,
-  );
-  if (!Number.isFinite(trace)) throw new Error('A candidate gave no number.');
+  const call = (): number => fit(points).points.length;
+  time(call, Math.max(3, Math.ceil(400_000 / n)));
+  const calls = Math.max(1, Math.ceil((SECONDS_A_ROUND * 1e6) / Math.max(1, time(call, Math.max(1, Math.ceil(20_000 / n))))));
+  return median(Array.from({ length: ROUNDS }, () => time(call, calls)));
 }
 
 /**
  * A hundred thousand stations are 18 MB of result. In Node's usual nursery of 16 MB they would be copied twice on the way out of it, which is
  * more work than making them; with a larger one the arithmetic is what is timed, for every candidate alike.
  */
-const NURSERY = '--max-semi-space-size=128';
+const FLAGS = ['--max-semi-space-size=128', '--expose-gc', '--import', 'tsx'];
 
-if (process.execArgv.includes(NURSERY)) main();
-else
-  process.exitCode =
-    spawnSync(process.execPath, [NURSERY, ...process.execArgv, ...process.argv.slice(1)], { stdio: 'inherit' }).status ?? 1;
+/** The same in a process of its own, so that nobody sweeps up after another. */
+function measureApart(candidate: number, n: number): number {
+  return Number(execFileSync(process.execPath, [...FLAGS, __filename, String(candidate), String(n)], { encoding: 'utf8' }));
+}
+
+/** From 1,000 to 100,000 stations: 1 is linear. */
+function growth(micros: readonly (readonly number[])[], candidate: number): string {
+  return ((micros[2]?.[candidate] ?? NaN) / (micros[1]?.[candidate] ?? NaN) / 100).toFixed(2);
+}
+
+function main(): void {
+  console.log('plane fit with all diagnostics, median processor time; every candidate in JavaScript makes the same object');
+  const table = SIZES.map((n) => {
+    const micros = [...CANDIDATES.map((_, candidate) => measureApart(candidate, n)), inR(stations(n))];
+    const [ours = NaN, closed = NaN] = micros;
+    console.log(`\n${n} stations`);
+    [...CANDIDATES.map(({ name }) => name), 'R lm, studentized residuals'].forEach((name, i) => {
+      const against =
+        i === 0 ? `${(ours / closed).toFixed(2)} × the closed form` : `${((micros[i] ?? NaN) / ours).toFixed(2)} × fitPlane`;
+      console.log(`  ${name.padEnd(28)} ${(micros[i] ?? NaN).toFixed(2).padStart(12)} µs   ${against}`);
+    });
+    return micros;
+  });
+  console.log(
+    `\nfrom 1,000 to 100,000 stations: fitPlane ${growth(table, 0)} × linear, closed form ${growth(table, 1)} × linear`,
+  );
+}
+
+const [, , candidate, size] = process.argv;
+const asked = candidate === undefined ? undefined : CANDIDATES[Number(candidate)];
+if (asked === undefined) main();
+else console.log(measure(asked.fit, Number(size)));

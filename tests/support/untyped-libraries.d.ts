@@ -6,5 +6,7 @@ declare module 'ml-regression' {
     readonly weights: number[][];
     readonly stdError: number;
     readonly stdErrors: number[];
+    /** Covariance of the coefficients, the constant last. */
+    readonly stdErrorMatrix: { get(row: number, column: number): number };
   }
 }
