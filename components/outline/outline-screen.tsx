@@ -65,6 +65,15 @@ function OutlineEditing({ footing, job, personId }: { footing: Footing; job: Job
       heights={goesAlong ? [120, 170] : undefined}
     />
   );
+  const notices = <OutlineNotices editor={editor} units={units} may={may} />;
+  // Refused beside the run that brought it about; what is only open still waits in its place above, and does not push the fields about.
+  const crossesHere = goesAlong && state.kind === 'crosses';
+  const along = goesAlong ? (
+    <>
+      {picture}
+      <View role="status">{crossesHere ? notices : null}</View>
+    </>
+  ) : null;
   const measures = <OutlineMeasures editor={editor} units={units} />;
   const shapeForm = shapes ? (
     <ShapeForm
@@ -96,9 +105,7 @@ function OutlineEditing({ footing, job, personId }: { footing: Footing; job: Job
           {goesAlong ? null : picture}
           {may ? null : <Notice kind="plain">{t(mayBefore ? 'locked.shots' : 'locked.role')}</Notice>}
           <SavingNotices editor={editor} footingId={footing.id} />
-          <View role="status">
-            <OutlineNotices editor={editor} units={units} may={may} />
-          </View>
+          <View role="status">{crossesHere ? null : notices}</View>
           {wide ? measures : null}
         </Column>
         <Column share={2}>
@@ -111,9 +118,7 @@ function OutlineEditing({ footing, job, personId }: { footing: Footing; job: Job
             </EmptyState>
           ) : null}
           {shapeForm}
-          {draft.runs.length > 0 ? (
-            <RunList editor={editor} footing={footing} units={units} may={may} picture={goesAlong ? picture : null} />
-          ) : null}
+          {draft.runs.length > 0 ? <RunList editor={editor} footing={footing} units={units} may={may} picture={along} /> : null}
           {draft.runs.length > 0 && !shapes && may ? (
             <Button label={t('action.shapesAgain')} variant="quiet" size="small" onPress={() => setShapes(true)} />
           ) : null}
