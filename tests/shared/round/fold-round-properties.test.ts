@@ -1,4 +1,4 @@
-import fc from 'fast-check';
+import { array, assert, constant, infiniteStream, integer, nat, oneof, property, record, type Arbitrary } from 'fast-check';
 import type { FieldRecord } from '@/shared/records';
 import { foldRound } from '@/shared/round/fold-round';
 import { orderRecords } from '@/shared/round/order-records';
@@ -9,23 +9,23 @@ const STATIONS = 5;
 const context = contextOf(footingOf(STATIONS));
 const SERIES = idOf(0x5e, 1);
 
-const step = fc.oneof(
+const step = oneof(
   {
     weight: 6,
-    arbitrary: fc.record({
-      do: fc.constant('shoot' as const),
-      station: fc.nat(STATIONS - 1),
-      off: fc.integer({ min: -6, max: 6 }),
-      lap: fc.integer({ min: 1, max: 2 }),
+    arbitrary: record({
+      do: constant('shoot' as const),
+      station: nat(STATIONS - 1),
+      off: integer({ min: -6, max: 6 }),
+      lap: integer({ min: 1, max: 2 }),
     }),
   },
-  { weight: 1, arbitrary: fc.record({ do: fc.constant('check' as const), off: fc.integer({ min: -4, max: 4 }) }) },
-  { weight: 1, arbitrary: fc.record({ do: fc.constant('strike' as const), back: fc.nat(5) }) },
+  { weight: 1, arbitrary: record({ do: constant('check' as const), off: integer({ min: -4, max: 4 }) }) },
+  { weight: 1, arbitrary: record({ do: constant('strike' as const), back: nat(5) }) },
 );
-const morning = fc.array(step, { maxLength: 25 });
+const morning = array(step, { maxLength: 25 });
 
 function walk(
-  steps: readonly (typeof step extends fc.Arbitrary<infer T> ? T : never)[],
+  steps: readonly (typeof step extends Arbitrary<infer T> ? T : never)[],
   deviceId = PHONE_A,
   seriesId = SERIES,
 ): Phone {
@@ -69,8 +69,8 @@ const result = (state: RoundState) => ({
 
 describe('property tests of the fold', () => {
   it('no order of clocks changes a result on one device', () => {
-    fc.assert(
-      fc.property(morning, fc.infiniteStream(fc.integer({ min: 0, max: 4_000_000_000_000 })), (steps, clocks) => {
+    assert(
+      property(morning, infiniteStream(integer({ min: 0, max: 4_000_000_000_000 })), (steps, clocks) => {
         const { made } = walk(steps);
         const times = clocks[Symbol.iterator]();
         const time = () => times.next().value as number; // an infinite stream never ends
@@ -84,8 +84,8 @@ describe('property tests of the fold', () => {
   });
 
   it('no order in which records arrive changes a result, not with two devices either', () => {
-    fc.assert(
-      fc.property(morning, morning, fc.infiniteStream(fc.nat()), (steps, others, numbers) => {
+    assert(
+      property(morning, morning, infiniteStream(nat()), (steps, others, numbers) => {
         const all: FoldRecord[] = [...stored(walk(steps).made), ...stored(walk(others, PHONE_B, idOf(0x5f, 1)).made)];
         const keys = numbers[Symbol.iterator]();
         const shuffled = all
@@ -98,8 +98,8 @@ describe('property tests of the fold', () => {
   });
 
   it('a struck shot never changes a result except by its absence', () => {
-    fc.assert(
-      fc.property(morning, (steps) => {
+    assert(
+      property(morning, (steps) => {
         const { made } = walk(steps);
         const struck = new Set(made.flatMap((record) => (record.kind === 'strike' ? [record.targetId] : [])));
         const without = made.filter((record) => record.kind !== 'strike' && !struck.has(record.id));
@@ -116,8 +116,8 @@ describe('property tests of the fold', () => {
   });
 
   it('records that the server has and those still on the phone fold alike', () => {
-    fc.assert(
-      fc.property(morning, fc.nat(30), (steps, cut) => {
+    assert(
+      property(morning, nat(30), (steps, cut) => {
         const { made } = walk(steps);
         const halves: FoldRecord[] = [...stored(made.slice(0, cut)), ...local(made.slice(cut))];
         expect(result(foldRound(halves, context))).toEqual(result(foldRound(stored(made), context)));
@@ -126,8 +126,8 @@ describe('property tests of the fold', () => {
   });
 
   it('the order of records never reorders a device, and is the same whatever order they are given in', () => {
-    fc.assert(
-      fc.property(morning, morning, (steps, others) => {
+    assert(
+      property(morning, morning, (steps, others) => {
         const records: FieldRecord[] = [...walk(steps).made, ...walk(others, PHONE_B, idOf(0x5f, 1)).made];
         const ordered = orderRecords(stored(records)).map(({ record }) => record);
         expect(orderRecords(stored(records).reverse()).map(({ record }) => record)).toEqual(ordered);
