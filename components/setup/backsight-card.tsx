@@ -1,3 +1,4 @@
+import { useState } from 'react';
 import { useTranslation } from 'react-i18next';
 import { StyleSheet, View } from 'react-native';
 import { printLength, printSmall } from '@/components/lengths/print-length';
@@ -10,38 +11,51 @@ import { space, target } from '@/constants/theme';
 import { useTokens } from '@/hooks/use-tokens';
 import type { RoundBundle } from '@/shared/api/round-endpoints';
 import type { RoundSeries } from '@/shared/round/round-state';
+import { BacksightKeys } from './backsight-keys';
 import type { Setup } from './use-setup';
 
-/** Reading the rod on the benchmark, once or as often as one likes. */
+/** Reading the rod on the benchmark, once or as often as one likes: typed, or with keys for a glove. */
 export function BacksightCard({ setup, bundle }: { setup: Setup; bundle: RoundBundle }) {
   const { t } = useTranslation('setup');
+  const [keys, setKeys] = useState(false);
   const { series, rules } = setup;
   const benchmark = bundle.benchmarks.find(({ id }) => id === setup.picked.benchmarkId)?.name ?? t('instruments.benchmark');
   const again = series !== null && series.hi !== null;
   const style = rules?.style ?? bundle.job.unitStyle;
+  const keying = keys && rules !== null;
+  const change = () => {
+    if (keying) setup.keepAsText();
+    setKeys(!keying);
+  };
   return (
-    <Card title={t('backsight.title', { benchmark })} weight="heavy">
-      {series ? <Backsights setup={setup} series={series} bundle={bundle} /> : null}
-      <TextField
-        label={t(again ? 'backsight.again' : 'backsight.label', { benchmark })}
-        hint={again ? t('backsight.againHint') : t(`backsight.hint.${style}`)}
-        value={setup.text}
-        onChangeText={setup.type}
-        onSubmitEditing={setup.record}
-        error={setup.refusalAt('reading')}
-        autoCapitalize="none"
-        autoComplete="off"
-        maxLength={40}
-        figures
-      />
-      {setup.refusalAt('keeping') ? <Notice kind="refusal">{setup.refusalAt('keeping')}</Notice> : null}
-      {again ? (
+    <>
+      <Card title={t('backsight.title', { benchmark })} weight="heavy">
+        {series ? <Backsights setup={setup} series={series} bundle={bundle} /> : null}
+        {keying ? null : (
+          <TextField
+            label={t(again ? 'backsight.again' : 'backsight.label', { benchmark })}
+            hint={again ? t('backsight.againHint') : t(`backsight.hint.${style}`)}
+            value={setup.entry.typed ?? ''}
+            onChangeText={(text) => setup.key({ kind: 'type', text })}
+            onSubmitEditing={setup.record}
+            error={setup.refusalAt('reading')}
+            autoCapitalize="none"
+            autoComplete="off"
+            maxLength={40}
+            figures
+          />
+        )}
+        {setup.refusalAt('keeping') ? <Notice kind="refusal">{setup.refusalAt('keeping')}</Notice> : null}
         <View style={styles.buttons}>
-          <Button label={t('backsight.recordAgain')} variant="plain" busy={setup.keeping} onPress={setup.record} />
-          <Button label={t('backsight.anew')} variant="quiet" onPress={setup.anew} />
+          {again ? (
+            <Button label={t('backsight.recordAgain')} variant="plain" busy={setup.keeping} onPress={setup.record} />
+          ) : null}
+          {rules ? <Button label={t(keying ? 'backsight.typing' : 'backsight.keys')} variant="quiet" onPress={change} /> : null}
+          {again ? <Button label={t('backsight.anew')} variant="quiet" onPress={setup.anew} /> : null}
         </View>
-      ) : null}
-    </Card>
+      </Card>
+      {keying ? <BacksightKeys setup={setup} rules={rules} /> : null}
+    </>
   );
 }
 

@@ -4,8 +4,9 @@ import { describeLengthRefusal } from '@/components/lengths/describe-length-refu
 import { lengthRefusal } from '@/components/lengths/length-field';
 import { printRound } from '@/components/lengths/print-length';
 import { readLength, type LengthRule } from '@/components/lengths/read-length';
-import { readEntry, type EntryReading, type EntryRules } from '@/components/shoot/read-entry';
-import { startEntry } from '@/components/shoot/reading-entry';
+import { keyedText, readEntry, type EntryReading, type EntryRules } from '@/components/shoot/read-entry';
+import { keyEntry, startEntry, type EntryAction, type ReadingEntry } from '@/components/shoot/reading-entry';
+import { refusalWords } from '@/components/shoot/refusal-words';
 import { i18n } from '@/hooks/i18n/i18n';
 import { usualCheckLimit } from '@/hooks/round/record-drafts';
 import { useRecorder } from '@/hooks/round/use-recorder';
@@ -48,7 +49,10 @@ function rulesOf(bundle: RoundBundle, rodId: string | null): EntryRules | null {
 }
 
 function readingRefusal(reading: Exclude<EntryReading, { kind: 'reading' }>, rules: EntryRules): string {
-  if (reading.kind === 'wanting') return i18n.t('setup:backsight.wanting');
+  if (reading.kind === 'wanting') {
+    const nothing = reading.what === 'reading' || reading.what === 'feet';
+    return nothing ? i18n.t('setup:backsight.wanting') : refusalWords(reading, rules.style);
+  }
   const { error } = reading;
   if (error.code === 'length-negative') return i18n.t('setup:backsight.upright');
   if (error.code === 'reading-longer-than-rod') {
@@ -69,12 +73,19 @@ export function useSetup(roundId: string, view: ReadyRound) {
   const picked: Picked = { ...usualPick(bundle, state), ...chosen };
   const [stand, setStand] = useState<PlanPoint | null>(null);
   const [distance, setDistance] = useState('');
-  const [text, setText] = useState('');
+  const [kept, setKept] = useState<ReadingEntry | null>(null);
   const [seriesId, setSeriesId] = useState<string | null>(null);
   const [refusal, setRefusal] = useState<SetupRefusal | null>(null);
   const [keeping, setKeeping] = useState(false);
   const atWork = useRef(false);
   const rules = rulesOf(bundle, picked.rodId);
+  const style = rules?.style ?? bundle.job.unitStyle;
+  // What was keyed for a rod in another unit is no reading of this one; its text still is.
+  const entry: ReadingEntry = kept?.style === style ? kept : { ...startEntry(style, null), typed: kept?.typed ?? null };
+  const key = (action: EntryAction) => {
+    setKept(keyEntry(entry, action));
+    setRefusal(null);
+  };
   const distanceRule: LengthRule = { style: bundle.job.unitStyle, sign: 'not-negative', bareDecimal: 'feet' };
   const checkLimit = usualCheckLimit(bundle.job.unitStyle);
 
@@ -87,7 +98,7 @@ export function useSetup(roundId: string, view: ReadyRound) {
     if (benchmarkId === null) return missing('benchmarkId', i18n.t('setup:backsight.missing.benchmark'));
     const unread = distance.trim() === '' ? null : lengthRefusal(distance, distanceRule);
     if (unread !== null) return { ok: false, refusal: { where: 'distance', sentence: unread } } as const;
-    const reading = readEntry({ ...startEntry(rules.style, null), typed: text }, rules);
+    const reading = readEntry(entry, rules);
     if (reading.kind !== 'reading') {
       return { ok: false, refusal: { where: 'reading', sentence: readingRefusal(reading, rules) } } as const;
     }
@@ -114,7 +125,7 @@ export function useSetup(roundId: string, view: ReadyRound) {
         style: given.rules.style,
         reading: reading.reading,
       });
-      setText('');
+      setKept(null);
     } catch (error) {
       if (error instanceof AnalysisError) throw error;
       setRefusal({ where: 'keeping', sentence: i18n.t('setup:backsight.notKept') });
@@ -137,10 +148,12 @@ export function useSetup(roundId: string, view: ReadyRound) {
     distance,
     setDistance,
     distanceRule,
-    text,
-    type: (typed: string) => {
-      setText(typed);
-      setRefusal(null);
+    entry,
+    key,
+    /** From the keys back to the field: what was keyed so far stands in it. */
+    keepAsText: () => {
+      const text = rules ? keyedText(entry, rules) : null;
+      setKept({ ...startEntry(style, null), typed: text });
     },
     rules,
     checkLimit,
@@ -156,7 +169,7 @@ export function useSetup(roundId: string, view: ReadyRound) {
         .catch(() => setRefusal({ where: 'keeping', sentence: i18n.t('setup:backsight.notKept') })),
     anew: () => {
       setSeriesId(null);
-      setText('');
+      setKept(null);
       setRefusal(null);
     },
   };

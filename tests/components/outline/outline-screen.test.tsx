@@ -42,7 +42,7 @@ function serverWith(first: Footing, handlers: FakeHandlers = {}) {
 async function open(first: Footing, roles?: Role[]) {
   const server = serverWith(first);
   const drawn = renderSignedIn(<OutlineScreen footingId={FOOTING} />, roles);
-  await screen.findByText('Stepped footing');
+  await screen.findByText('Stepped footing · Ninth Street addition');
   return { ...server, ...drawn };
 }
 

@@ -1,4 +1,4 @@
-import { screen } from '@testing-library/react';
+import { screen, within } from '@testing-library/react';
 import { useSyncExternalStore } from 'react';
 import { SetupScreen } from '@/components/setup/setup-screen';
 import type { RecordDraft } from '@/hooks/outbox/outbox-storage';
@@ -124,6 +124,23 @@ test.each([
   expect(reading()).toHaveValue(text);
   expect(reading()).toHaveAttribute('aria-invalid', 'true');
   expect(mockDisk.records).toEqual([]);
+});
+
+test('a reading is keyed with large keys as on the shoot screen, and goes back to the field as it stands', async () => {
+  const { person } = open();
+  await person.click(screen.getByText('Key it with large keys'));
+  const digits = within(screen.getByLabelText('Digits'));
+  await person.click(digits.getByText('3'));
+  await person.click(digits.getByText('Inches ›'));
+  await person.click(digits.getByText('5'));
+  await person.click(digits.getByText('Fraction ›'));
+  await person.click(screen.getByText('Record the backsight'));
+  expect(screen.getByText('Pick the fraction first: 0 for a whole inch.')).toBeInTheDocument();
+  await person.click(screen.getByText('3 eighths'));
+  await person.click(screen.getByText('Type it instead'));
+  expect(reading()).toHaveValue('3′ 5 3/8″');
+  await person.click(screen.getByText('Record the backsight'));
+  expect(await screen.findByText('101′ 2″ + 3′ 5 3/8″ = 104′ 7 3/8″')).toBeInTheDocument();
 });
 
 test('without a benchmark the screen says so and offers to add one, and records nothing', async () => {

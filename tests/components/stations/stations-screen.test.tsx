@@ -29,7 +29,7 @@ async function open(first: Footing, { job = jobOf(), roles }: { job?: Job; roles
     },
   });
   const drawn = renderSignedIn(<StationsScreen footingId={FOOTING} />, roles);
-  await screen.findByText('Stepped footing');
+  await screen.findByText('Stepped footing · Ninth Street addition');
   return { calls, state, ...drawn };
 }
 
