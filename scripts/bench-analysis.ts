@@ -230,9 +230,8 @@ const median = (values: readonly number[]): number => [...values].sort((a, b) =>
 /** Kept from being optimized away: every result leaves a trace here. */
 let trace = 0;
 
-/** Processor microseconds a call over one round, so that a busy machine changes little; the garbage of whoever ran before is swept away first. */
+/** Processor microseconds a call over one round, so that a busy machine changes little. */
 function time(call: () => number, calls: number): number {
-  globalThis.gc?.();
   const from = process.cpuUsage();
   for (let i = 0; i < calls; i += 1) trace += call();
   const { user, system } = process.cpuUsage(from);
@@ -260,7 +259,7 @@ function measure(fit: (points: readonly PlanePoint[]) => PlaneFit, n: number): n
  * A hundred thousand stations are 18 MB of result. In Node's usual nursery of 16 MB they would be copied twice on the way out of it, which is
  * more work than making them; with a larger one the arithmetic is what is timed, for every candidate alike.
  */
-const FLAGS = ['--max-semi-space-size=128', '--expose-gc', '--import', 'tsx'];
+const FLAGS = ['--max-semi-space-size=128', '--import', 'tsx'];
 
 /** The same in a process of its own, so that nobody sweeps up after another. */
 function measureApart(candidate: number, n: number): number {
