@@ -143,7 +143,7 @@ const styles = StyleSheet.create({
   back: {
     width: target.least,
     height: target.least,
-    marginLeft: -space.l,
+    marginLeft: -(space.l - 2),
     marginRight: -space.s,
     alignItems: 'center',
     justifyContent: 'center',

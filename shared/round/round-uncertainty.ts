@@ -41,7 +41,8 @@ export function roundShotUncertainty(
   const receiver = record.receiver ?? (record.how === 'set' ? 'coarse' : null);
   const { absolute, relative } = shotUncertainty({
     graduation: readingGraduation(context.job, rod),
-    receiverBand: receiver ? band[receiver] : undefined,
+    // Papers give the whole width of the band; the maths takes how far it reaches to either side.
+    receiverBand: receiver ? band[receiver] / 2 : undefined,
     set: record.how === 'set',
     laserAccuracy: laser.accuracy,
     laserAccuracyAt: laser.accuracyAt,

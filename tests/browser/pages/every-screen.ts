@@ -78,7 +78,7 @@ export const stickingOut = (page: Page): Promise<string[]> =>
       }
       return false;
     };
-    return [...document.querySelectorAll('body *')]
+    return Array.from(document.querySelectorAll('body *'))
       .filter((element) => element.getBoundingClientRect().right > clientWidth + 1 && !hidden(element))
       .map((element) => `${element.tagName} ${(element.textContent ?? '').slice(0, 40)}`);
   });
@@ -86,16 +86,19 @@ export const stickingOut = (page: Page): Promise<string[]> =>
 /** Buttons, links, fields and groups of choices that the Tab key does not come to. */
 export async function notReachedByTab(page: Page): Promise<string[]> {
   const count = await page.evaluate(() => {
-    const controls = [
-      ...document.querySelectorAll<HTMLElement>(
+    const controls = Array.from(
+      document.querySelectorAll<HTMLElement>(
         '[role="button"], button, a[href], input, textarea, [role="checkbox"], [role="radiogroup"]',
       ),
-    ];
+    );
     const shown = controls.filter((control) => {
       if (control.getAttribute('aria-disabled') === 'true' || control.closest('[aria-hidden="true"]')) return false;
       return control.getClientRects().length > 0;
     });
-    for (const [index, control] of shown.entries()) control.dataset.control = String(index);
+    // forEach: what is sent to the page must not lean on this file's compiled helpers.
+    shown.forEach((control, index) => {
+      control.dataset.control = String(index);
+    });
     document.body.tabIndex = -1;
     document.body.focus();
     return shown.length;
@@ -111,7 +114,7 @@ export async function notReachedByTab(page: Page): Promise<string[]> {
     });
   }
   return page.evaluate(() =>
-    [...document.querySelectorAll<HTMLElement>('[data-control]:not([data-reached])')]
+    Array.from(document.querySelectorAll<HTMLElement>('[data-control]:not([data-reached])'))
       .filter((control) => !control.querySelector('[data-reached]'))
       .map(
         (control) =>

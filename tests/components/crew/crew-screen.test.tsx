@@ -22,7 +22,7 @@ async function open(roles: Role[], handlers: FakeHandlers = {}) {
 
 test('the owner gives a person another role, and the ones they had stay', async () => {
   const { person, calls } = await open(['owner']);
-  await person.click(screen.getByRole('button', { name: 'Change the roles of Sol Aguilar' }));
+  await person.click(screen.getByRole('button', { name: 'Change roles of Sol Aguilar' }));
   await person.click(screen.getByRole('checkbox', { name: /^wall installer/ }));
   await person.click(screen.getByRole('button', { name: 'Save' }));
   await waitFor(() => expect(screen.queryByRole('button', { name: 'Save' })).toBeNull());
@@ -31,7 +31,7 @@ test('the owner gives a person another role, and the ones they had stay', async 
 
 test('a person is at least one thing: taking the last role away cannot be saved', async () => {
   const { person, calls } = await open(['owner']);
-  await person.click(screen.getByRole('button', { name: 'Change the roles of Sol Aguilar' }));
+  await person.click(screen.getByRole('button', { name: 'Change roles of Sol Aguilar' }));
   await person.click(screen.getByRole('checkbox', { name: /^laser operator/ }));
   expect(screen.getByText('A person is at least one of these.')).toBeInTheDocument();
   await person.click(screen.getByRole('button', { name: 'Save' }));
@@ -44,7 +44,7 @@ test('a company keeps an owner, and the sentence says what to do', async () => {
       throw new Refused('not-possible');
     },
   });
-  await person.click(screen.getByRole('button', { name: 'Change the roles of Sol Aguilar' }));
+  await person.click(screen.getByRole('button', { name: 'Change roles of Sol Aguilar' }));
   await person.click(screen.getByRole('button', { name: 'Save' }));
   expect(await screen.findByText('A company needs an owner. Make somebody else owner first.')).toBeInTheDocument();
 });

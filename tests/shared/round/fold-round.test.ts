@@ -75,13 +75,13 @@ describe('what a shot comes to', () => {
     expect(target?.deciding?.uncertainty.absolute).toBeCloseTo(Math.hypot(SIXTEENTH / Math.sqrt(12), laser, backsight), 3);
   });
 
-  it('carries the receiver’s band when it was set, the wider one with the coarse setting', () => {
+  it('carries half the receiver’s band to either side when it was set, the wider one with the coarse setting', () => {
     const made = phone();
     made.shoot(0, 4 * FOOT, { how: 'set', receiver: 'fine', keyed: '' });
     made.shoot(1, 4 * FOOT, { how: 'set', receiver: 'coarse', keyed: '' });
     const { targets } = foldRound(local(made.made), contextOf(footingOf(2)));
-    expect(targets[0]?.deciding?.uncertainty.relative).toBeCloseTo(SIXTEENTH / Math.sqrt(3), 3);
-    expect(targets[1]?.deciding?.uncertainty.relative).toBeCloseTo((2 * SIXTEENTH) / Math.sqrt(3), 3);
+    expect(targets[0]?.deciding?.uncertainty.relative).toBeCloseTo(SIXTEENTH / 2 / Math.sqrt(3), 3);
+    expect(targets[1]?.deciding?.uncertainty.relative).toBeCloseTo(SIXTEENTH / Math.sqrt(3), 3);
   });
 
   it('takes the farthest target from the middle for its distance when nobody tapped where the laser stands', () => {
