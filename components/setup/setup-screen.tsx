@@ -18,6 +18,7 @@ import { HiCard } from './hi-card';
 import { InstrumentsCard } from './instruments-card';
 import { LaserCaution, TrenchCaution } from './setup-cautions';
 import { StandCard } from './stand-card';
+import { useRefusalInSight } from './use-refusal-in-sight';
 import { useSetup } from './use-setup';
 
 /** Laser, rod and benchmark; where the laser stands; the backsight; and from it the height of instrument. */
@@ -38,6 +39,7 @@ function SettingUp({ roundId, view }: { roundId: string; view: ReadyRound }) {
   const { round, footing, job } = bundle;
   const wide = useWide();
   const setup = useSetup(roundId, view);
+  useRefusalInSight(setup.refusal);
   const saved = savedState(useOutbox());
   const may = useMay(round.surface === 'top' ? 'round.shoot' : 'round.any-surface');
   const open = may && round.closedAt === null;

@@ -40,6 +40,15 @@ const mockDisk = {
 };
 let mockBundle: RoundBundle = morningBundle();
 
+/** jsdom lays nothing out and cannot scroll: it is written down instead. */
+let broughtIntoSight: Element[] = [];
+beforeEach(() => {
+  broughtIntoSight = [];
+  Element.prototype.scrollIntoView = function scrollIntoView(this: Element) {
+    broughtIntoSight.push(this);
+  };
+});
+
 jest.mock('expo-router', () => ({ Link: ({ children }: { children: unknown }) => children }));
 jest.mock('@/hooks/outbox/use-outbox', () => ({ useOutbox: () => ({ kept: [], sending: false }) }));
 jest.mock('@/hooks/round/use-round', () => ({ useRound: () => mockHooks.useRound() }));
@@ -111,7 +120,7 @@ test('a backsight gives the height of instrument with its working, and the grade
 test.each([
   ['', 'Read the rod on the benchmark and key what it says.'],
   ['3 5 1/32', /^This rod is read to 1\/16″\. The nearest marks are 3′ 5″ and 3′ 5 1\/16″\.$/],
-  ['13\' 1"', 'This rod is 13′ long.'],
+  ['13\' 1"', 'This rod is 13′ long. Read it again, or pick the rod that is held.'],
   ['-1\' 0"', 'An upright rod starts at zero. Take the minus off.'],
   ["4'7'", /cannot be read as a length/],
   ['4\' 13"', /13 inches are a foot or more/],
@@ -123,6 +132,7 @@ test.each([
   expect(await screen.findByText(sentence)).toBeInTheDocument();
   expect(reading()).toHaveValue(text);
   expect(reading()).toHaveAttribute('aria-invalid', 'true');
+  expect(broughtIntoSight).toEqual([screen.getByText(sentence).closest('[role="alert"]')]);
   expect(mockDisk.records).toEqual([]);
 });
 
