@@ -18,7 +18,10 @@ export function outlineRefusal(error: AnalysisError, style: LengthStyle): string
     case 'run-under-an-inch':
       return i18n.t('outline:refused.run-under-an-inch', { least: printLength(NM_PER_INCH, style) });
     case 'run-a-mile':
-      return i18n.t('outline:refused.run-a-mile', { length: length(details.length, style) });
+      // Who tapes in metres has no mile in mind.
+      return i18n.t(style === 'metric' ? 'outline:refused.run-a-mile-metric' : 'outline:refused.run-a-mile', {
+        length: length(details.length, style),
+      });
     case 'step-past-end':
       return i18n.t('outline:refused.step-past-end', { length: length(details.length, style) });
     case 'part-too-long':
