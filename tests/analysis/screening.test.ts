@@ -308,6 +308,22 @@ describe('screenShots: what must change nothing', () => {
     );
   });
 
+  it('is the same in any unit of length, but for the busts that have names', () => {
+    fc.assert(
+      fc.property(bustRound, fc.constantFrom(1e-12, 1 / 304_800_000, 1e6), ({ seed, busts }, unit) => {
+        const shots = busted(
+          round(30, 'rectangle', 0.5, normal(seeded(seed))),
+          Object.fromEntries(busts.map((at) => [at, INCH])),
+        );
+        const scaled = shots.map((shot) => ({ ...shot, x: shot.x * unit, y: shot.y * unit, deviation: shot.deviation * unit }));
+        const [before, after] = [screenShots(shots, closed), screenShots(scaled, { closed: true, u: U * unit })];
+        expect(after.map(({ id, seenBy }) => ({ id, seenBy }))).toEqual(before.map(({ id, seenBy }) => ({ id, seenBy })));
+        before.forEach(({ size }, i) => expect((after[i]?.size ?? NaN) / (size * unit)).toBeCloseTo(1, 6));
+      }),
+      { numRuns: 60 },
+    );
+  });
+
   it('gives finite suspects or an AnalysisError on any input', () => {
     const shot = fc.record({
       id: fc.string({ maxLength: 2 }),
