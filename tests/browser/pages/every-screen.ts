@@ -104,13 +104,13 @@ export async function notReachedByTab(page: Page): Promise<string[]> {
     return shown.length;
   });
   // A radio group takes one Tab; anything else one each. Twice as many as there are comes round, whatever else may be focused.
-  for (let press = 0; press < count * 2 + 10; press += 1) {
+  for (let press = 0, left = count; left > 0 && press < count * 2 + 10; press += 1) {
     await page.keyboard.press('Tab');
-    await page.evaluate(() => {
+    left = await page.evaluate(() => {
       const { activeElement } = document;
-      if (!(activeElement instanceof HTMLElement)) return;
-      const control = activeElement.closest<HTMLElement>('[data-control]');
+      const control = activeElement instanceof HTMLElement ? activeElement.closest<HTMLElement>('[data-control]') : null;
       if (control) control.dataset.reached = 'yes';
+      return document.querySelectorAll('[data-control]:not([data-reached])').length;
     });
   }
   return page.evaluate(() =>
