@@ -252,7 +252,9 @@ function measure(fit: (points: readonly PlanePoint[]) => PlaneFit, n: number): n
   const call = (): number => fit(points).points.length;
   time(call, Math.max(3, Math.ceil(400_000 / n)));
   const calls = Math.max(1, Math.ceil((SECONDS_A_ROUND * 1e6) / Math.max(1, time(call, Math.max(1, Math.ceil(20_000 / n))))));
-  return median(Array.from({ length: ROUNDS }, () => time(call, calls)));
+  const micros = median(Array.from({ length: ROUNDS }, () => time(call, calls)));
+  if (!(trace > 0)) throw new Error('A candidate gave no points.');
+  return micros;
 }
 
 /**
