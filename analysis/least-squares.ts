@@ -179,11 +179,12 @@ function standardErrors(
   variance: number,
 ): number[] {
   const inverse = inverseColumns(r);
-  const slopes = means.map((_, j) => Math.sqrt(variance * inverse.reduce((sum, column) => sum + (column[j] ?? 0) ** 2, 0)));
+  const root = (square: number): number => inRange('standard error', Math.sqrt(square));
+  const slopes = means.map((_, j) => root(variance * inverse.reduce((sum, column) => sum + (column[j] ?? 0) ** 2, 0)));
   if (perWeight === null) return slopes;
   const atOrigin = inverse.reduce(
     (sum, column) => sum + column.reduce((dot, entry, j) => dot + entry * (means[j] ?? 0), 0) ** 2,
     perWeight,
   );
-  return [Math.sqrt(variance * atOrigin), ...slopes];
+  return [root(variance * atOrigin), ...slopes];
 }
