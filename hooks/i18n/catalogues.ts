@@ -11,9 +11,6 @@ import enCrew from '@/assets/locales/en/crew.json';
 import enSetup from '@/assets/locales/en/setup.json';
 import enShoot from '@/assets/locales/en/shoot.json';
 import enResults from '@/assets/locales/en/results.json';
-import enNotes from '@/assets/locales/en/notes.json';
-import enCourse from '@/assets/locales/en/course.json';
-import enRelease from '@/assets/locales/en/release.json';
 import enAccount from '@/assets/locales/en/account.json';
 import enCharts from '@/assets/locales/en/charts.json';
 import esCommon from '@/assets/locales/es/common.json';
@@ -29,9 +26,6 @@ import esCrew from '@/assets/locales/es/crew.json';
 import esSetup from '@/assets/locales/es/setup.json';
 import esShoot from '@/assets/locales/es/shoot.json';
 import esResults from '@/assets/locales/es/results.json';
-import esNotes from '@/assets/locales/es/notes.json';
-import esCourse from '@/assets/locales/es/course.json';
-import esRelease from '@/assets/locales/es/release.json';
 import esAccount from '@/assets/locales/es/account.json';
 import esCharts from '@/assets/locales/es/charts.json';
 
@@ -50,9 +44,6 @@ const en = {
   setup: enSetup,
   shoot: enShoot,
   results: enResults,
-  notes: enNotes,
-  course: enCourse,
-  release: enRelease,
   account: enAccount,
   charts: enCharts,
 };
@@ -71,9 +62,6 @@ const es = {
   setup: esSetup,
   shoot: esShoot,
   results: esResults,
-  notes: esNotes,
-  course: esCourse,
-  release: esRelease,
   account: esAccount,
   charts: esCharts,
 };
