@@ -402,6 +402,9 @@ describe('fitPlane: what the geometry carries', () => {
       [0.01, 0, 270],
       [0, -0.01, 0],
       [-0.01, -0.01, 45],
+      // Half a degree either side of north, where the circle closes.
+      [-0.01 * Math.sin(Math.PI / 360), -0.01 * Math.cos(Math.PI / 360), 0.5],
+      [0.01 * Math.sin(Math.PI / 360), -0.01 * Math.cos(Math.PI / 360), 359.5],
     ] as const;
     for (const [b, c, azimuth] of falls) {
       const fit = fitPlane(

@@ -222,7 +222,7 @@ emit(if (last > 0) sort(gone[1:last]) - 1 else -1)`,
   it('takes out by the plane the shots that R takes out, in thirty rounds with and without busts', () => {
     const rounds = Array.from({ length: 30 }, (_, k) => {
       const draw = normal(seeded(900 + k));
-      const clean = round(20 + k, 'rectangle', 1, draw).map((shot) => ({ ...shot, deviation: shot.deviation + 1000 * draw() }));
+      const clean = round(8 + k, 'rectangle', 1, draw).map((shot) => ({ ...shot, deviation: shot.deviation + 1000 * draw() }));
       return k % 3 === 0 ? clean : busted(clean, { 3: INCH / 3, [k % 17]: -INCH / 2, 12: INCH });
     });
     const ours = rounds.map((shots) =>
