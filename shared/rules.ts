@@ -89,16 +89,6 @@ export function readyBedRule(wall: WallType, style: UnitStyle): BedRuleInput {
         style: own,
       };
     case 'panel-forms':
-      return {
-        material: 'shim',
-        least: 0,
-        most: pick(1 / 2, 12),
-        nominal: pick(1 / 4, 6),
-        grindMost: pick(1 / 4, 6),
-        beddedFraction: 1,
-        courseHeight: null,
-        style: own,
-      };
     case 'sill':
       return {
         material: 'shim',
